@@ -1,0 +1,67 @@
+/** What a number is: its unit family, and with it the checks that every number of the kind passes. */
+export type Kind = "density" | "percent" | "points" | "mass" | "volume" | "length" | "ratio" | "count" | "energy" | "temperature" | "water";
+
+export interface Quantity {
+  /** the trade's name, as it stands in messages */
+  readonly name: string;
+  /** as printed; an underscore starts a subscript */
+  readonly symbol: string;
+  readonly kind: Kind;
+  /** limits of what can be meant at all, in the quantity's own unit; outside them a number is refused */
+  readonly from: number;
+  readonly to: number;
+  /** the lower limit itself is refused too */
+  readonly above?: true;
+  /** what an argument stands for when it is left out */
+  readonly leftOut?: number;
+}
+
+const positive = { from: 0, to: Infinity, above: true } as const;
+const orZero = { from: 0, to: Infinity } as const;
+
+export const quantities = {
+  wetDensity: { name: "wet density", symbol: "ρ", kind: "density", ...positive },
+  dryDensity: { name: "dry density", symbol: "ρ_d", kind: "density", ...positive },
+  maxDryDensity: { name: "maximum dry density", symbol: "ρ_d,max", kind: "density", ...positive },
+  fillDryDensity: { name: "dry density of the fill", symbol: "ρ_d,fill", kind: "density", ...positive },
+  bankDryDensity: { name: "dry density in the bank", symbol: "ρ_d,bank", kind: "density", ...positive },
+  waterDensity: { name: "density of water", symbol: "ρ_w", kind: "density", ...positive },
+  allowance: { name: "allowance", symbol: "a", kind: "density", ...orZero },
+
+  waterContent: { name: "water content", symbol: "w", kind: "percent", from: 0, to: 2000 },
+  wetBasisWater: { name: "water content on wet mass", symbol: "w_wet", kind: "percent", from: 0, to: 95 },
+  optimumWater: { name: "optimum water content", symbol: "w_opt", kind: "percent", from: 0, to: 2000 },
+  targetWater: { name: "target water content", symbol: "w_target", kind: "percent", from: 0, to: 2000 },
+  waterGap: { name: "distance from optimum", symbol: "Δw", kind: "points", from: -Infinity, to: Infinity },
+  saturation: { name: "degree of saturation", symbol: "S", kind: "percent", from: 0, to: 100, above: true },
+  airVoids: { name: "air voids", symbol: "A", kind: "percent", from: 0, to: 99 },
+  porosity: { name: "porosity", symbol: "n", kind: "percent", from: 0, to: 100 },
+  relativeCompaction: { name: "relative compaction", symbol: "RC", kind: "percent", from: 0, to: 200 },
+  loss: { name: "loss", symbol: "L", kind: "percent", from: 0, to: 95, leftOut: 0 },
+
+  specificGravity: { name: "specific gravity of the solids", symbol: "G_s", kind: "ratio", from: 1, to: 6 },
+  voidRatio: { name: "void ratio", symbol: "e", kind: "ratio", ...orZero },
+
+  wetMass: { name: "mass of wet soil and tin", symbol: "m_wet", kind: "mass", ...positive },
+  dryMass: { name: "mass of dry soil and tin", symbol: "m_dry", kind: "mass", ...positive },
+  tare: { name: "mass of the tin", symbol: "m_tin", kind: "mass", ...orZero, leftOut: 0 },
+  mouldAndSoil: { name: "mass of mould and wet soil", symbol: "m_gross", kind: "mass", ...positive },
+  mouldMass: { name: "mass of the mould", symbol: "m_mould", kind: "mass", ...orZero },
+  rammerMass: { name: "mass of the rammer", symbol: "m_r", kind: "mass", ...positive },
+  mouldVolume: { name: "volume of the mould", symbol: "V", kind: "volume", ...positive },
+  volume: { name: "volume", symbol: "V", kind: "volume", ...orZero },
+  fillVolume: { name: "volume of the fill", symbol: "V_fill", kind: "volume", ...orZero },
+  bankVolume: { name: "volume in the bank", symbol: "V_bank", kind: "volume", ...orZero },
+  drop: { name: "drop of the rammer", symbol: "h", kind: "length", ...positive },
+  blows: { name: "blows per layer", symbol: "N_b", kind: "count", ...positive },
+  layers: { name: "layers", symbol: "N_l", kind: "count", ...positive },
+  compactiveEffort: { name: "compactive effort", symbol: "E", kind: "energy", ...orZero },
+  waterNeed: { name: "water needed", symbol: "W", kind: "water", from: -Infinity, to: Infinity },
+  waterToSpray: { name: "water to spray", symbol: "W_spray", kind: "water", ...orZero },
+  temperature: { name: "temperature", symbol: "t", kind: "temperature", from: 0, to: 40 },
+} as const satisfies Record<string, Quantity>;
+
+export type QuantityId = keyof typeof quantities;
+
+/** The same table with the literal types forgotten, for code that serves any quantity. */
+export const quantity = (id: QuantityId): Quantity => quantities[id];
