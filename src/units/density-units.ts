@@ -18,7 +18,7 @@ export const densityUnits: readonly DensityUnit[] = [
   { id: "Mg/m3", printed: "Mg/m³", kgM3: 1000, spellings: ["mg/m3", "t/m3", "g/cm3", "g/cc", "g/ml", "kg/l", "kg/dm3", "tonne/m3", "gm/cc", "gm/cm3"] },
   { id: "kg/m3", printed: "kg/m³", kgM3: 1, spellings: ["kg/m3", "g/l", "kg/cum"] },
   { id: "kN/m3", printed: "kN/m³", kgM3: 1000 / STANDARD_GRAVITY, spellings: ["kn/m3", "kn/cum"] },
-  { id: "lb/ft3", printed: "lb/ft³", kgM3: poundPerCubicFoot, spellings: ["lb/ft3", "lbf/ft3", "pcf", "lbs/ft3", "lb/cuft", "lb/cf", "lbm/ft3"] },
+  { id: "lb/ft3", printed: "lb/ft³", kgM3: poundPerCubicFoot, spellings: ["lb/ft3", "lbf/ft3", "pcf", "lbs/ft3", "lb/cuft", "lb/cf", "lbs/cuft", "lbm/ft3"] },
   { id: "lb/yd3", printed: "lb/yd³", kgM3: poundPerCubicFoot / 27, spellings: ["lb/yd3", "lbs/yd3", "pcy", "lb/cuyd", "lb/cy"] },
 ];
 
@@ -37,9 +37,11 @@ export const unitOfWater = (density: number, waterKgM3: number): DensityUnit | u
 /** A soil's dry density lies between these multiples of the density of water; a number outside is in another unit. */
 export const SOIL_OVER_WATER = { low: 0.4, high: 3.5 } as const;
 
-/** The unit in which a number would be a soil's density. Where several would do, the commonest for the number: 1.8, 18, 115, 1800. */
+export function couldBeSoil(density: number, { kgM3 }: DensityUnit, waterKgM3: number): boolean {
+  const ratio = density * kgM3 / waterKgM3;
+  return ratio >= SOIL_OVER_WATER.low && ratio <= SOIL_OVER_WATER.high;
+}
+
+/** The unit in which a number would be a soil's density. Where several would do, the first of the list: 1.8, 18, 115, 1800 tell themselves apart. */
 export const unitItLooksLike = (density: number, waterKgM3: number): DensityUnit | undefined =>
-  densityUnits.find(({ kgM3 }) => {
-    const ratio = density * kgM3 / waterKgM3;
-    return ratio >= SOIL_OVER_WATER.low && ratio <= SOIL_OVER_WATER.high;
-  });
+  densityUnits.find((unit) => couldBeSoil(density, unit, waterKgM3));

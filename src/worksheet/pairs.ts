@@ -1,5 +1,5 @@
 import { CellError, columnsOf, isBlank, isHeading, quoted, refusal, rowsOf, type Block } from "./cell";
-import { fractionRefusal, looksLikeFractions, numberOf } from "./readers";
+import { numberOf } from "./readers";
 import type { QuantityId } from "../relations/quantities";
 
 /** Two series read together. `rows` tells where each pair stands in the ranges, counted from 1. */
@@ -19,8 +19,8 @@ export function readPairs(firstId: QuantityId, first: Block, secondId: QuantityI
     return refusal(`${firstReader.name} has ${rowsOf(first)} rows and ${columnsOf(first)} columns, ${secondReader.name} has ${rowsOf(second)} and ${columnsOf(second)}: give ranges of the same size.`);
   const firsts = inLine(first), seconds = inLine(second);
   if (!firsts || !seconds) return refusal(`give ${firstReader.name} and ${secondReader.name} as one row or one column each.`);
-  const fractions = firstReader.check?.(first);
-  if (fractions) return looksLikeFractions(first) ? fractionRefusal(firstReader.name) : fractions;
+  const trouble = firstReader.check?.(first) ?? secondReader.check?.(second);
+  if (trouble) return trouble;
 
   const word = columnsOf(first) === 1 ? "row" : "column";
   const pairs: { first: number[]; second: number[]; rows: number[] } = { first: [], second: [], rows: [] };

@@ -1,0 +1,107 @@
+import { compactiveEffort } from "../../src/compaction/effort";
+import { wetDensityInMould } from "../../src/compaction/mould";
+import { bankVolumeForFill } from "../../src/earthwork/borrow";
+import { waterNeedGallons, waterNeedLitres, waterToSpray } from "../../src/earthwork/water";
+import { relativeCompaction, waterGap } from "../../src/field/relative-compaction";
+import { dryDensityFromWet, wetDensityFromDry } from "../../src/phase/density";
+import { airVoidsLine, airVoidsOfPoint, degreeOfSaturation, leastSpecificGravity, saturationLine, saturationWater, zeroAirVoids } from "../../src/phase/lines";
+import { porosityFromDensity, voidRatioFromDensity } from "../../src/phase/voids";
+import { waterContentFromMasses, waterContentFromWetBasis } from "../../src/phase/water-content";
+import { densityOfWater } from "../../src/units/water-density";
+import type { AnyRelation } from "../relations-of-all-rooms";
+
+/** One printed figure: it must come out within half a unit of the last digit printed. */
+export interface Figure {
+  readonly relation: AnyRelation;
+  readonly inputs: Readonly<Record<string, number>>;
+  readonly says: string;
+  readonly source: string;
+  /** half a unit of the last digit, unless the source's own rounding is coarser and is stated here */
+  readonly within?: number;
+}
+
+const as = (relation: unknown): AnyRelation => relation as AnyRelation;
+
+const handbook = "Geotechnical Engineering: Soil and Foundation Principles and Practice, table 13.1, water 62.4 lb/ft3";
+/** Rows: water content. Columns: specific gravity 2.5, 2.6, 2.65, 2.7, 3.0. The 0 % row and 45 further entries. */
+const ZERO_AIR_VOIDS_TABLE: readonly (readonly [number, ...string[]])[] = [
+  [0, "156.0", "162.2", "165.4", "168.5", "187.2"],
+  [5, "138.7", "143.6", "146.0", "148.4", "162.8"],
+  [10, "124.8", "128.8", "130.7", "132.7", "144.0"],
+  [15, "113.5", "116.7", "118.3", "119.9", "129.1"],
+  [20, "104.0", "106.7", "108.1", "109.4", "117.0"],
+  [25, "96.0", "98.3", "99.5", "100.6", "107.0"],
+  [30, "89.1", "91.1", "92.1", "93.1", "98.5"],
+  [40, "78.0", "79.5", "80.3", "81.0", "85.1"],
+  [50, "69.3", "70.5", "71.1", "71.7", "74.9"],
+];
+const GRAVITIES = [2.5, 2.6, 2.65, 2.7, 3.0];
+
+const zeroAirVoidsFigures: Figure[] = ZERO_AIR_VOIDS_TABLE.flatMap(([waterContent, ...row]) => row.map((says, i) => ({
+  relation: as(zeroAirVoids), inputs: { waterContent, specificGravity: GRAVITIES[i]!, waterDensity: 62.4 }, says, source: handbook,
+})));
+
+const cipm = "CIPM 2001 (Metrologia 38, 301), check values in kg/m3";
+const waterDensityFigures: Figure[] = ([[4, "999.9749"], [5, "999.9668"], [10, "999.7027"], [15, "999.1026"], [20, "998.2067"], [25, "997.0470"], [30, "995.6488"]] as const)
+  .map(([temperature, says]) => ({ relation: as(densityOfWater), inputs: { temperature }, says, source: cipm }));
+
+const POUND = 0.45359237, INCH = 25.4, CUBIC_FOOT = 28316.846592;
+const efforts: Figure[] = [
+  ["ASTM D698 methods A and B", 5.5 * POUND, 12 * INCH, 25, 3, CUBIC_FOOT / 30, "592.5"],
+  ["ASTM D698 method C", 5.5 * POUND, 12 * INCH, 56, 3, 0.075 * CUBIC_FOOT, "589.9"],
+  ["ASTM D1557 methods A and B", 10 * POUND, 18 * INCH, 25, 5, CUBIC_FOOT / 30, "2693.3"],
+  ["ASTM D1557 method C", 10 * POUND, 18 * INCH, 56, 5, 0.075 * CUBIC_FOOT, "2681.3"],
+  ["BS 1377-4, 2.5 kg rammer, one-litre mould", 2.5, 300, 27, 3, 1000, "595.8"],
+  ["BS 1377-4, 2.5 kg rammer, CBR mould", 2.5, 300, 62, 3, 2305, "593.5"],
+  ["IS 2720-7 light compaction", 2.6, 310, 25, 3, 1000, "592.8"],
+  ["IS 2720-8 heavy compaction", 4.9, 450, 25, 5, 1000, "2703.0"],
+].map(([source, rammerMass, drop, blows, layers, mouldVolume, says]) => ({
+  relation: as(compactiveEffort), inputs: { rammerMass, drop, blows, layers, mouldVolume } as Record<string, number>, says: says as string, source: `${source as string}, compactive effort from its own apparatus`,
+}));
+
+const text9 = "Principles of Geotechnical Engineering, 9th edition";
+const sheetG = "published BS 1377 laboratory sheet (set G)";
+
+export const figures: readonly Figure[] = [
+  ...zeroAirVoidsFigures,
+  ...waterDensityFigures,
+  ...efforts,
+  { relation: as(dryDensityFromWet), inputs: { wetDensity: 124.5, waterContent: 10.6 }, says: "112.57", source: `${text9}, problem 6.4, recomputed (the source truncates to 112.5)` },
+  { relation: as(dryDensityFromWet), inputs: { wetDensity: 111, waterContent: 8.6 }, says: "102.2", source: `${text9}, problem 6.4` },
+  { relation: as(dryDensityFromWet), inputs: { wetDensity: 124, waterContent: 13.7 }, says: "109.06", source: `${text9}, problem 6.5` },
+  { relation: as(wetDensityFromDry), inputs: { dryDensity: 15.725, waterContent: 13 }, says: "17.77", source: `${text9}, problem 6.14, moist unit weight` },
+  { relation: as(relativeCompaction), inputs: { dryDensity: 109.06, maxDryDensity: 125.0 }, says: "87.2", source: `${text9}, problem 6.5` },
+  { relation: as(relativeCompaction), inputs: { dryDensity: 16.341, maxDryDensity: 16.9 }, says: "96.69", source: `${text9}, problem 6.12` },
+  { relation: as(degreeOfSaturation), inputs: { dryDensity: 120.63, waterContent: 14.9, specificGravity: 2.69, waterDensity: 62.4 }, says: "102.4", source: `${text9}, problem 6.4: the fourth point is impossible`, within: 0.15 },
+  { relation: as(voidRatioFromDensity), inputs: { dryDensity: 125.0, specificGravity: 2.69, waterDensity: 62.4 }, says: "0.343", source: `${text9}, problem 6.5` },
+  { relation: as(porosityFromDensity), inputs: { dryDensity: 125.0, specificGravity: 2.69, waterDensity: 62.4 }, says: "25.5", source: `${text9}, problem 6.5: e/(1+e) of the void ratio 0.343` },
+  { relation: as(leastSpecificGravity), inputs: { dryDensity: 120.63, waterContent: 14.9, waterDensity: 62.4 }, says: "2.715", source: `${text9}, problem 6.4: derived from the impossible point` , within: 0.003 },
+  { relation: as(saturationWater), inputs: { dryDensity: 107.0, specificGravity: 3.0, waterDensity: 62.4 }, says: "25.0", source: `${handbook}, read backwards` },
+  ...([[3168, 10, 11.3, 62.1], [3300, 11, 4.5, 82.7], [3334, 12, 1.9, 92.6], [3320, 14, 0.4, 98.6]] as const).map(([gross, ...rest]) => [(gross - 1125) / 1000 / (1 + rest[0] / 100), ...rest] as const).flatMap(([dryDensity, waterContent, air, saturation]) => [
+    { relation: as(airVoidsOfPoint), inputs: { dryDensity, waterContent, specificGravity: 2.65, waterDensity: 1 }, says: air.toFixed(1), source: "exercise of a UK soil-mechanics text (set A): air voids of its points, recomputed" },
+    { relation: as(degreeOfSaturation), inputs: { dryDensity, waterContent, specificGravity: 2.65, waterDensity: 1 }, says: saturation.toFixed(1), source: "the same (set A): degree of saturation, recomputed" },
+  ]),
+  // the lines themselves, through the same exercise read backwards: the density at the printed air voids and saturation
+  { relation: as(airVoidsLine), inputs: { waterContent: 11, specificGravity: 2.65, airVoids: 4.5, waterDensity: 1 }, says: "1.959", source: "the same (set A), read backwards", within: 0.002 },
+  { relation: as(airVoidsLine), inputs: { waterContent: 0, specificGravity: 3, airVoids: 50, waterDensity: 62.4 }, says: "93.6", source: `${handbook}: half of 187.2, as half the volume is air; derived` },
+  { relation: as(saturationLine), inputs: { waterContent: 11, specificGravity: 2.65, saturation: 82.7, waterDensity: 1 }, says: "1.959", source: "the same (set A), read backwards", within: 0.002 },
+  ...([[70, 65.3, 27], [60, 55.6, 24.6], [54, 49.7, 24]] as const).map(([wetMass, dryMass, tare], i) => ({
+    relation: as(waterContentFromMasses), inputs: { wetMass, dryMass, tare }, says: ["12.27", "14.19", "16.73"][i]!, source: `${sheetG}: one tin, derived from its masses` })),
+  { relation: as(waterContentFromMasses), inputs: { wetMass: 601.7, dryMass: 577.9, tare: 39.6 }, says: "4.42", source: "municipal D1557 record (set O), first point" },
+  { relation: as(waterContentFromMasses), inputs: { wetMass: 511.0, dryMass: 479.3, tare: 38.4 }, says: "7.19", source: "the same, second point" },
+  ...([[5, "5.26"], [8, "8.70"], [10, "11.11"], [12, "13.64"], [15, "17.65"], [18, "21.95"], [25, "33.33"]] as const).map(([wetBasisWater, says]) => ({
+    relation: as(waterContentFromWetBasis), inputs: { wetBasisWater }, says, source: "AASHTO T 217: reading on wet mass to water content, derived from its formula" })),
+  { relation: as(wetDensityInMould), inputs: { mouldAndSoil: 3168, mouldMass: 1125, mouldVolume: 1000 }, says: "2.043", source: "exercise of a UK soil-mechanics text (set A), first point" },
+  { relation: as(wetDensityInMould), inputs: { mouldAndSoil: 4231, mouldMass: 2015, mouldVolume: 1017.6 }, says: "2.178", source: `${sheetG}, third point: 1.86 dry at 17.10 %` },
+  { relation: as(waterGap), inputs: { waterContent: 13.7, optimumWater: 12.5 }, says: "1.2", source: `${text9}, problems 6.4 and 6.5: field water against the water content of the highest point` },
+  { relation: as(waterNeedLitres), inputs: { volume: 1, dryDensity: 1.8, waterContent: 10, targetWater: 11 }, says: "18", source: "18 L per m3 for 1.8 t/m3 and one point: common practice, no published source" },
+  { relation: as(waterNeedLitres), inputs: { volume: 960000, dryDensity: 1.85, waterContent: 8, targetWater: 11.6 }, says: "63936000", source: "published problem: 960 000 m3, 3.6 points at 1.85 t/m3 give 63 936 m3 of water" },
+  { relation: as(waterNeedGallons), inputs: { volume: 1, dryDensity: 110, waterContent: 10, targetWater: 11 }, says: "3.56", source: "27 ft3 a yd3 and 8.345 lb a US gallon: derived" },
+  { relation: as(waterToSpray), inputs: { waterNeed: 90, loss: 10 }, says: "100.00", source: "loss as share of what is sprayed: derived from its definition" },
+  { relation: as(bankVolumeForFill), inputs: { fillVolume: 100, fillDryDensity: 18, bankDryDensity: 17, loss: 0 }, says: "105.88", source: "highway engineering text: 17 to 18 kN/m3, 100 m3 of fill" },
+  { relation: as(bankVolumeForFill), inputs: { fillVolume: 75000, fillDryDensity: 1790, bankDryDensity: 1540, loss: 0 }, says: "87175", source: "published problem: 75 000 m3 of fill, had 1540 kg/m3 been dry", within: 1 },
+  { relation: as(bankVolumeForFill), inputs: { fillVolume: 90, fillDryDensity: 18, bankDryDensity: 18, loss: 10 }, says: "100.00", source: "loss as share of the bank volume: derived from its definition" },
+];
+
+/** Half a unit of the last digit printed, or the tolerance that the figure states. */
+export const tolerance = ({ says, within }: Figure): number => within ?? 0.5 * 10 ** -(says.split(".")[1]?.length ?? 0) * (1 + 1e-9);

@@ -1,0 +1,86 @@
+import fc from "fast-check";
+import { all, create } from "mathjs";
+import type { Interval } from "../../src/formula/interval";
+import { quantity } from "../../src/relations/quantities";
+import { relation } from "../../src/relations/relation";
+import { dryDensityFromWet, wetDensityFromDry } from "../../src/phase/density";
+import { leastSpecificGravity, saturationLine } from "../../src/phase/lines";
+import { allRelations } from "../relations-of-all-rooms";
+
+const math = create(all!, {});
+
+/** Random inputs where every relation is far from its poles. */
+const inputRange = (id: string): { min: number; max: number } =>
+  id === "tare" ? { min: 1, max: 20 } : id === "temperature" ? { min: 0, max: 40 } : id.endsWith("Mass") || id === "mouldAndSoil" ? { min: 30, max: 60 }
+    : id === "loss" || id === "airVoids" || id === "wetBasisWater" ? { min: 0, max: 60 } : { min: 1.1, max: 40 };
+
+test("every relation of the project is met", () => expect(allRelations.length).toBeGreaterThanOrEqual(20));
+
+describe.each(allRelations)("%s", (_, one) => {
+  const node = math.parse(one.text).compile();
+  // hoisted: one symbolic derivative costs 8 ms
+  const derivatives = Object.fromEntries(one.from.map((name) => [name, math.derivative(one.text, name).compile()]));
+  const inputs = fc.record(Object.fromEntries(one.from.map((name) => [name, fc.double({ ...inputRange(name), noNaN: true })]))) as fc.Arbitrary<Record<string, number>>;
+  const byPosition = one.by(...one.from);
+
+  test("value, positional function and slopes agree with mathjs", () => {
+    let met = 0;
+    fc.assert(fc.property(inputs, (x) => {
+      const expected = node.evaluate({ ...x }) as number;
+      if (!Number.isFinite(expected)) return;
+      met++;
+      const scale = Math.max(1, Math.abs(expected));
+      expect(Math.abs(one.value(x as never) - expected)).toBeLessThanOrEqual(1e-12 * scale);
+      expect(byPosition(...one.from.map((name) => x[name]!))).toBe(one.value(x as never));
+      for (const name of one.from) {
+        const slope = derivatives[name]!.evaluate({ ...x }) as number;
+        if (Number.isFinite(slope)) expect(Math.abs(one.slope(name, x as never) - slope)).toBeLessThanOrEqual(1e-9 * Math.max(1, Math.abs(slope), scale));
+      }
+    }), { numRuns: 1500, seed: 7 });
+    expect(met).toBeGreaterThan(1000);
+  });
+
+  test("the range holds every value in the box and is reached at its corners", () => {
+    let met = 0;
+    fc.assert(fc.property(inputs, fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { minLength: 6, maxLength: 6 }), (x, shares) => {
+      const box = Object.fromEntries(one.from.map((name) => [name, { low: x[name]! - 0.005, high: x[name]! + 0.005 } as Interval]));
+      const range = one.range(box as never);
+      if (!Number.isFinite(range.low) || !Number.isFinite(range.high)) return;
+      const inside = one.value(Object.fromEntries(one.from.map((name, i) => [name, box[name]!.low + shares[i]! * 0.01])) as never);
+      const slack = 1e-9 * Math.max(1, Math.abs(inside));
+      expect(inside).toBeGreaterThanOrEqual(range.low - slack);
+      expect(inside).toBeLessThanOrEqual(range.high + slack);
+      if (one.from.includes("temperature" as never)) return; // it turns at 4 °C, so a corner need not be the extreme
+      met++;
+      const corners = Array.from({ length: 1 << one.from.length }, (__, bits) => one.value(Object.fromEntries(one.from.map((name, i) => [name, bits >> i & 1 ? box[name]!.high : box[name]!.low])) as never));
+      expect(Math.abs(range.low - Math.min(...corners))).toBeLessThanOrEqual(slack);
+      expect(Math.abs(range.high - Math.max(...corners))).toBeLessThanOrEqual(slack);
+    }), { numRuns: 1000, seed: 8 });
+    if (!one.from.includes("temperature" as never)) expect(met).toBeGreaterThan(500);
+  });
+
+  test("the working shows symbols, then numbers", () => {
+    const working = one.working(Object.fromEntries(one.from.map((name, i) => [name, String(i + 2)])) as never);
+    for (const name of one.from) expect(working).toContain(quantity(name).symbol);
+    expect(working).not.toMatch(/undefined|NaN/);
+  });
+});
+
+test("the working reads as an engineer would write it", () => {
+  expect(dryDensityFromWet.working({ wetDensity: "2.05", waterContent: "12.5" })).toBe("ρ_d = ρ ÷ (1 + w ÷ 100) = 2.05 ÷ (1 + 12.5 ÷ 100)");
+});
+
+test("a solved relation undoes the one it came from", () => {
+  expect(wetDensityFromDry.value({ dryDensity: dryDensityFromWet.value({ wetDensity: 2.05, waterContent: 12.5 }), waterContent: 12.5 })).toBeCloseTo(2.05, 12);
+  expect(leastSpecificGravity.text).toBe("1 / (waterDensity / dryDensity - waterContent / 100)");
+  expect(() => saturationLine.solvedFor("dryDensity" as never)).toThrow(/exactly once/);
+});
+
+test("misuse is a compile error", () => {
+  // @ts-expect-error an input is missing
+  expect(dryDensityFromWet.value.bind(null, { wetDensity: 2 })).toThrow;
+  // @ts-expect-error tare is no input of this relation
+  expect(dryDensityFromWet.slope.bind(null, "tare", { wetDensity: 2, waterContent: 1 })).toThrow;
+  // @ts-expect-error a quantity is misspelt
+  expect(relation("dryDensity", "wetDensty / (1 + waterContent / 100)", { title: "none" }).from).toContain("wetDensty");
+});
