@@ -1,7 +1,7 @@
 import { numberOf, waterDensity, type Reader } from "./readers";
 import type { QuantityId } from "../relations/quantities";
 import type { Relation } from "../relations/relation";
-import { CellError, refusal, type Block, type Cell } from "./cell";
+import { refusal, type Block, type Cell, type CellError } from "./cell";
 import { argument, column } from "./column";
 import { unitGuard } from "./unit-guard";
 

@@ -1,0 +1,187 @@
+/**
+ * The example workbook's contents: an invented job, with no real place, firm or person behind it.
+ * Readings are typed; everything that can be computed is a live formula.
+ */
+export type Style = "title" | "note" | "heading" | "unit" | "text" | "input" | "whole" | "tenth" | "hundredth" | "thousandth" | "percent";
+
+export type Entry =
+  | null
+  | { readonly value: string | number; readonly style: Style }
+  | { readonly formula: string; readonly style: Style };
+
+export interface ExampleSheet {
+  readonly name: string;
+  /** in characters */
+  readonly widths: readonly number[];
+  readonly rows: readonly (readonly Entry[])[];
+  /** rows that stay in sight */
+  readonly frozenRows: number;
+}
+
+const text = (value: string, style: Style = "text"): Entry => ({ value, style });
+const number = (value: number, style: Style = "input"): Entry => ({ value, style });
+const formula = (body: string, style: Style = "hundredth"): Entry => ({ formula: body, style });
+const headings = (...words: string[]): Entry[] => words.map((word) => word === "" ? null : text(word, "heading"));
+const units = (...words: string[]): Entry[] => words.map((word) => word === "" ? null : text(word, "unit"));
+
+/** A1's rows made as wide as asked, so that a block can be placed at a column. */
+function place(rows: Entry[][], atRow: number, atColumn: number, block: readonly (readonly Entry[])[]): void {
+  block.forEach((line, r) => line.forEach((entry, c) => {
+    const row = rows[atRow + r] ??= [];
+    while (row.length <= atColumn + c) row.push(null);
+    row[atColumn + c] = entry;
+  }));
+}
+
+function sheet(name: string, widths: number[], frozenRows: number, ...blocks: [row: number, column: number, block: readonly (readonly Entry[])[]][]): ExampleSheet {
+  const rows: Entry[][] = [];
+  for (const [row, column, block] of blocks) place(rows, row, column, block);
+  for (let r = 0; r < rows.length; r++) rows[r] ??= [];
+  return { name, widths, rows, frozenRows };
+}
+
+const start = sheet("Start here", [4, 100], 0, [0, 0, [
+  [text("Tampsheet example workbook", "title")],
+  [text("Hollow Lane embankment: an invented job. No real place, firm or person; every reading is made up.", "note")],
+  [],
+  [number(1, "whole"), text("Lab A: a laboratory test in SI units, points down the rows. Select A6:K12, headings and all, and look at the pane.")],
+  [number(2, "whole"), text("Lab B: a test in US units, points across the columns. Select A4:F8.")],
+  [number(3, "whole"), text("Lab C: a test with a reading past the zero-air-voids line. Select A4:C10 and enter 2.68 as the specific gravity.")],
+  [number(4, "whole"), text("Field: field tests against those references, and water and borrow for the next lift.")],
+  [number(5, "whole"), text("Reference: the remaining functions, one row each, for trying out.")],
+  [],
+  [null, text("Change a reading (yellow) and every figure that rests on it follows. A compaction curve holds for the soil tested, as it was tested.", "note")],
+  [null, text("These figures do not replace the project specification, the local code, or the judgement of a licensed engineer.", "note")],
+]]);
+
+/** mould and wet soil, tin numbers, and the three weighings of each tin, in grams */
+const LAB_A = [
+  [6116, 14, 58.31, 54.54, 17.62], [6222, 7, 61.72, 56.78, 16.59], [6290, 22, 63.20, 57.48, 17.05], [6281, 3, 66.94, 59.99, 16.88], [6231, 31, 64.41, 57.05, 17.20],
+] as const;
+
+const labA = sheet("Lab A", [7, 13, 10, 11, 8, 10, 10, 9, 11, 12, 12, 3, 30, 14, 13, 13, 24], 7,
+  [0, 0, [
+    [text("Lab A: lean clay, light compaction (2.5 kg rammer)", "title")],
+    [text("Invented data. Points run down the rows; water from tins, density from a one-litre mould.", "note")],
+    [text("Specific gravity of the solids", "text"), null, null, number(2.7, "hundredth"), text("measured", "note")],
+  ]],
+  [5, 0, [
+    headings("Point", "Mould + wet soil", "Mould", "Mould volume", "Tin no", "Wet + tin", "Dry + tin", "Tin", "Water content", "Wet density", "Dry density"),
+    units("", "g", "g", "cm³", "", "g", "g", "g", "%", "Mg/m³", "Mg/m³"),
+    ...LAB_A.map(([gross, tin, wet, dry, tare], i): Entry[] => [
+      number(i + 1, "whole"), number(gross, "input"), number(4196, "input"), number(1000, "input"), number(tin, "whole"), number(wet, "input"), number(dry, "input"), number(tare, "input"),
+      ...(i === 0 ? [formula("TAMP.WATERPCT(F8:F12,G8:G12,H8:H12)", "tenth"), formula("TAMP.MOULDWET(B8:B12,C8:C12,D8:D12)", "thousandth"), formula("TAMP.SOILDRY(J8:J12,I8:I12)", "thousandth")] : []),
+    ]),
+  ]],
+  [5, 12, [
+    [text("Peak of the curve", "heading"), null, null, null],
+    [formula('TAMP.PEAKFIT(I8:I12,K8:K12,"auto",D3,"Mg/m3")', "text")],
+  ]],
+  [16, 0, [
+    headings("Degree of saturation and air voids at each point"),
+    [text("Saturation, %"), null, null, formula("TAMP.SATPCT(K8:K12,I8:I12,D3)", "tenth")],
+  ]],
+  [16, 5, [
+    [],
+    [text("Air voids, %"), null, null, formula("TAMP.AIRPCT(K8:K12,I8:I12,D3)", "tenth")],
+  ]],
+);
+
+const WATER_B = [7.1, 9.0, 11.2, 13.1, 15.0], WET_B = [124.2, 130.1, 134.9, 134.2, 131.3];
+const labB = sheet("Lab B", [28, 12, 12, 12, 12, 12, 3, 30, 14, 13, 13], 0,
+  [0, 0, [
+    [text("Lab B: silty sand, standard effort", "title")],
+    [text("Invented data in US units. Points run across the columns.", "note")],
+    [],
+    [text("Point", "heading"), ...[1, 2, 3, 4, 5].map((n) => number(n, "whole"))],
+    [text("Water content (%)"), ...WATER_B.map((w) => number(w))],
+    [text("Wet unit weight (lb/ft³)"), ...WET_B.map((d) => number(d))],
+    [text("Dry unit weight (lb/ft³)"), formula("TAMP.SOILDRY(B6:F6,B5:F5)", "tenth")],
+    [text("Zero air voids (lb/ft³)"), formula('TAMP.VOIDFREE(B5:F5,B10,"lb/ft3")', "tenth")],
+    [],
+    [text("Specific gravity, assumed"), number(2.67, "hundredth")],
+    [],
+    [text("Maximum dry unit weight (lb/ft³)"), formula('TAMP.PEAKDRY(B5:F5,B7:F7,"auto",B10,"lb/ft3")', "tenth")],
+    [text("Optimum water content (%)"), formula('TAMP.PEAKWATER(B5:F5,B7:F7,"auto",B10,"lb/ft3")', "tenth")],
+    [],
+    [text("On the fitted curve", "heading"), ...[8, 10, 12, 14].map((w) => number(w, "tenth"))],
+    [text("Dry unit weight (lb/ft³)"), formula('TAMP.CURVEDRY(B15:E15,B5:F5,B7:F7,"auto",B10,"lb/ft3")', "tenth")],
+  ]],
+);
+
+const LAB_C = [[12.0, 16.6], [14.1, 17.24], [16.0, 17.6], [18.2, 17.52], [20.1, 17.34]] as const;
+const labC = sheet("Lab C", [10, 16, 16, 14, 16, 3, 12, 22, 80], 5,
+  [0, 0, [
+    [text("Lab C: clay, light compaction, as a contractor reported it", "title")],
+    [text("Invented data. One of these points cannot be right at the specific gravity stated: find it.", "note")],
+    [text("Specific gravity"), number(2.68, "hundredth")],
+    headings("Point", "Water content", "Dry unit weight", "Past the line", "Least Gs"),
+    units("", "%", "kN/m³", "", ""),
+    ...LAB_C.map(([w, dry], i): Entry[] => [
+      number(i + 1, "whole"), number(w), number(dry),
+      ...(i === 0 ? [formula('TAMP.PASTZAV(C6:C10,B6:B10,B3,"kN/m3")', "text"), formula('TAMP.LEASTGS(C6:C10,B6:B10,"kN/m3")', "hundredth")] : []),
+    ]),
+  ]],
+  [3, 6, [
+    headings("What to look at"),
+    [formula('TAMP.CURVEFLAGS(B6:B10,C6:C10,"auto",B3,"kN/m3")', "text")],
+  ]],
+);
+
+const FIELD = [
+  ["F1", "0+020", 2.047, 14.6], ["F2", "0+040", 2.012, 13.1], ["F3", "0+060", 2.061, 15.2], ["F4", "0+080", 1.969, 12.4],
+  ["F5", "0+100", 2.033, 16.8], ["F6", "0+120", 2.054, 14.1],
+] as const;
+const field = sheet("Field", [8, 12, 14, 14, 14, 14, 14, 16, 14], 6,
+  [0, 0, [
+    [text("Field tests on the lean clay, against Lab A", "title")],
+    [text("Invented data. Relative compaction and distance from optimum follow the fitted peak of Lab A.", "note")],
+    [text("Maximum dry density"), null, formula("TAMP.PEAKDRY('Lab A'!I8:I12,'Lab A'!K8:K12,\"auto\",'Lab A'!D3)", "thousandth"), text("Mg/m³", "unit")],
+    [text("Optimum water content"), null, formula("TAMP.PEAKWATER('Lab A'!I8:I12,'Lab A'!K8:K12,\"auto\",'Lab A'!D3)", "tenth"), text("%", "unit")],
+    headings("Test", "Station", "Wet density", "Water content", "Dry density", "Relative compaction", "From optimum", "Saturation", "Air voids"),
+    units("", "", "Mg/m³", "%", "Mg/m³", "%", "points", "%", "%"),
+    ...FIELD.map(([id, station, wet, w], i): Entry[] => [
+      text(id), text(station), number(wet, "input"), number(w, "input"),
+      ...(i === 0 ? [
+        formula("TAMP.SOILDRY(C7:C12,D7:D12)", "thousandth"), formula("TAMP.RELCOMP(E7:E12,C3)", "tenth"), formula("TAMP.WATERGAP(D7:D12,C4)", "tenth"),
+        formula("TAMP.SATPCT(E7:E12,D7:D12,'Lab A'!D3)", "tenth"), formula("TAMP.AIRPCT(E7:E12,D7:D12,'Lab A'!D3)", "tenth"),
+      ] : []),
+    ]),
+  ]],
+  [14, 0, [
+    headings("Next lift"),
+    [text("Volume of compacted fill, m³"), null, null, number(1200, "input")],
+    [text("Dry density of the fill, Mg/m³"), null, null, formula("0.97*C3", "thousandth")],
+    [text("Dry density in the borrow, Mg/m³"), null, null, number(1.62, "input")],
+    [text("Water content in the borrow, %"), null, null, number(11.5, "input")],
+    [text("Water lost in spraying, %"), null, null, number(10, "input")],
+    [text("Borrow to dig, m³ in the bank, 3 % wasted"), null, null, formula("TAMP.BANKVOL(D16,D17,D18,3)", "whole")],
+    [text("Water to spray, litres"), null, null, formula("TAMP.WATERADD(D16,D17,D19,C4,D20)", "whole")],
+  ]],
+);
+
+/** One row a function: what it answers, the formula, the unit. */
+const REFERENCE: readonly (readonly [string, string, Style, string])[] = [
+  ["Carbide reading of 12 % on wet mass, as water content on dry mass", "TAMP.DRYBASIS(12)", "hundredth", "%"],
+  ["Wet density of 1.80 Mg/m³ dry at 14.5 %", "TAMP.SOILWET(1.8,14.5)", "thousandth", "Mg/m³"],
+  ["5 % air-voids line at 16 %, Gs 2.70", "TAMP.AIRLINE(16,2.7,5)", "thousandth", "Mg/m³"],
+  ["80 % saturation line at 16 %, Gs 2.70", "TAMP.SATLINE(16,2.7,80)", "thousandth", "Mg/m³"],
+  ["Water that fills every void at 115 lb/ft³, Gs 2.67", 'TAMP.FULLWATER(115,2.67,"lb/ft3")', "tenth", "%"],
+  ["Void ratio at 18.1 kN/m³, Gs 2.70", 'TAMP.VOIDRATIO(18.1,2.7,"kN/m3")', "thousandth", ""],
+  ["Porosity at 18.1 kN/m³, Gs 2.70", 'TAMP.POREPCT(18.1,2.7,"kN/m3")', "tenth", "%"],
+  ["Water at 15 °C", 'TAMP.WATERDENS(15,"kg/m3")', "tenth", "kg/m³"],
+  ["1.83 Mg/m³ as a unit weight", 'TAMP.DENSITYAS(1.83,"Mg/m3","lb/ft3")', "tenth", "lb/ft³"],
+  ["Effort of 27 blows a layer, 3 layers, 2.5 kg, 300 mm, 1 litre", "TAMP.BLOWWORK(2.5,300,27,3,1000)", "tenth", "kJ/m³"],
+  ["Drive cylinder: 2147 g with 218 g of tube, 1021 cm³", "TAMP.MOULDWET(2147,218,1021)", "thousandth", "Mg/m³"],
+  ["Water content from 250 g wet, 220 g dry, tin 50 g", "TAMP.WATERPCT(250,220,50)", "hundredth", "%"],
+];
+const reference = sheet("Reference", [64, 14, 10], 3,
+  [0, 0, [
+    [text("One of each", "title")],
+    [text("Change the numbers inside the formulas to try a function out.", "note")],
+    headings("Question", "Answer", "Unit"),
+    ...REFERENCE.map(([question, body, style, unit]): Entry[] => [text(question), formula(body, style), text(unit, "unit")]),
+  ]],
+);
+
+export const exampleSheets: readonly ExampleSheet[] = [start, labA, labB, labC, field, reference];
