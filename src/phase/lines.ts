@@ -9,6 +9,9 @@ export const saturationWater = zeroAirVoids.solvedFor("waterContent");
 /** The smallest specific gravity at which a point does not lie past the zero-air-voids line. */
 export const leastSpecificGravity = zeroAirVoids.solvedFor("specificGravity");
 
+/** A point this share past the line is let be: the spread of the round figures in use for the density of water, 62.3 to 62.43 lb/ft3. Common practice, no published source. */
+export const LINE_ALLOWANCE = 0.002;
+
 /** The line of a constant degree of saturation. */
 export const saturationLine = relation(
   "dryDensity", "waterDensity / (waterContent / saturation + 1 / specificGravity)",

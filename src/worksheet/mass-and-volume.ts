@@ -1,4 +1,4 @@
-import { zeroAirVoids } from "../phase/lines";
+import { LINE_ALLOWANCE, zeroAirVoids } from "../phase/lines";
 import { densityOfWater } from "../units/water-density";
 import { refusal, type Block, type Cell, type CellError } from "./cell";
 import { argument, column } from "./column";
@@ -6,9 +6,6 @@ import { numberOf, unitOf, waterDensity } from "./readers";
 import { unitGuard } from "./unit-guard";
 
 type Cells = Block | null;
-
-/** The spread of the round figures in use for the density of water: 62.3 to 62.43 lb/ft3, 9.79 to 9.81 kN/m3. Common practice, no published source. */
-export const LINE_ALLOWANCE = 0.002;
 
 const line = zeroAirVoids.by("waterContent", "specificGravity", "waterDensity");
 

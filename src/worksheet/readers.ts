@@ -1,5 +1,6 @@
 import { quantity, type QuantityId } from "../relations/quantities";
 import { densityUnit, densityUnits, unitOfWater, type DensityUnit } from "../units/density-units";
+import { massUnit, massUnits, volumeUnit, volumeUnits, type MassUnit, type VolumeUnit } from "../units/mass-and-volume-units";
 import { WATER_KG_M3_AT_20 } from "../units/water-density";
 import { CellError, isBlank, quoted, refusal, type Block } from "./cell";
 
@@ -77,6 +78,19 @@ export function unitOf(name: string, leftOut?: string): Reader<DensityUnit> {
     },
   };
 }
+
+const oneOf = <Unit extends { readonly id: string }>(name: string, known: readonly Unit[], find: (text: string) => Unit | undefined): Reader<Unit | null> => ({
+  name,
+  leftOut: null,
+  read(value) {
+    if (value instanceof CellError) return value;
+    return (typeof value === "string" ? find(value) : undefined) ?? refusal(`${name} ${quoted(value ?? "")} is not known; choose one of ${known.map(({ id }) => id).join(", ")}.`);
+  },
+});
+
+/** A unit of mass or of volume; left out, none is named. */
+export const unitOfMass: Reader<MassUnit | null> = oneOf("unit of mass", massUnits, massUnit);
+export const unitOfVolume: Reader<VolumeUnit | null> = oneOf("unit of volume", volumeUnits, volumeUnit);
 
 /** The density of water in the sheet's unit: a number as the sheet takes it, or a unit, which stands for water at 20 °C. */
 export const waterDensity: Reader<number> = {
