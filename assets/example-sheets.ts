@@ -7,7 +7,9 @@ export type Style = "title" | "note" | "heading" | "unit" | "text" | "input" | "
 export type Entry =
   | null
   | { readonly value: string | number; readonly style: Style }
-  | { readonly formula: string; readonly style: Style };
+  | { readonly formula: string; readonly style: Style }
+  /** a cell that only has a format: a spill fills it */
+  | { readonly style: Style };
 
 export interface ExampleSheet {
   readonly name: string;
@@ -21,6 +23,8 @@ export interface ExampleSheet {
 const text = (value: string, style: Style = "text"): Entry => ({ value, style });
 const number = (value: number, style: Style = "input"): Entry => ({ value, style });
 const formula = (body: string, style: Style = "hundredth"): Entry => ({ formula: body, style });
+/** formats for the cells that a formula above will fill */
+const filled = (...styles: Style[]): Entry[] => styles.map((style) => ({ style }));
 const headings = (...words: string[]): Entry[] => words.map((word) => word === "" ? null : text(word, "heading"));
 const units = (...words: string[]): Entry[] => words.map((word) => word === "" ? null : text(word, "unit"));
 
@@ -59,7 +63,7 @@ const LAB_A = [
   [6116, 14, 58.31, 54.54, 17.62], [6222, 7, 61.72, 56.78, 16.59], [6290, 22, 63.20, 57.48, 17.05], [6281, 3, 66.94, 59.99, 16.88], [6231, 31, 64.41, 57.05, 17.20],
 ] as const;
 
-const labA = sheet("Lab A", [7, 13, 10, 11, 8, 10, 10, 9, 11, 12, 12, 3, 30, 14, 13, 13, 24], 7,
+const labA = sheet("Lab A", [7, 16, 9, 13, 8, 10, 10, 9, 14, 12, 12, 3, 29, 20, 14, 14], 7,
   [0, 0, [
     [text("Lab A: lean clay, light compaction (2.5 kg rammer)", "title")],
     [text("Invented data. Points run down the rows; water from tins, density from a one-litre mould.", "note")],
@@ -70,20 +74,29 @@ const labA = sheet("Lab A", [7, 13, 10, 11, 8, 10, 10, 9, 11, 12, 12, 3, 30, 14,
     units("", "g", "g", "cm³", "", "g", "g", "g", "%", "Mg/m³", "Mg/m³"),
     ...LAB_A.map(([gross, tin, wet, dry, tare], i): Entry[] => [
       number(i + 1, "whole"), number(gross, "input"), number(4196, "input"), number(1000, "input"), number(tin, "whole"), number(wet, "input"), number(dry, "input"), number(tare, "input"),
-      ...(i === 0 ? [formula("TAMP.WATERPCT(F8:F12,G8:G12,H8:H12)", "tenth"), formula("TAMP.MOULDWET(B8:B12,C8:C12,D8:D12)", "thousandth"), formula("TAMP.SOILDRY(J8:J12,I8:I12)", "thousandth")] : []),
+      ...(i === 0
+        ? [formula("TAMP.WATERPCT(F8:F12,G8:G12,H8:H12)", "tenth"), formula("TAMP.MOULDWET(B8:B12,C8:C12,D8:D12)", "thousandth"), formula("TAMP.SOILDRY(J8:J12,I8:I12)", "thousandth")]
+        : filled("tenth", "thousandth", "thousandth")),
     ]),
   ]],
   [5, 12, [
-    [text("Peak of the curve", "heading"), null, null, null],
-    [formula('TAMP.PEAKFIT(I8:I12,K8:K12,"auto",D3,"Mg/m3")', "text")],
-  ]],
-  [16, 0, [
-    headings("Degree of saturation and air voids at each point"),
-    [text("Saturation, %"), null, null, formula("TAMP.SATPCT(K8:K12,I8:I12,D3)", "tenth")],
-  ]],
-  [16, 5, [
+    headings("Peak of the curve", "", "", ""),
+    [formula('TAMP.PEAKFIT(I8:I12,K8:K12,"auto",D3,"Mg/m3")', "heading"), ...filled("heading", "heading", "heading")],
+    filled("text", "thousandth", "thousandth", "thousandth"),
+    filled("text", "tenth", "tenth", "tenth"),
     [],
-    [text("Air voids, %"), null, null, formula("TAMP.AIRPCT(K8:K12,I8:I12,D3)", "tenth")],
+    filled("text", "thousandth"),
+    [],
+    filled("text", "tenth"),
+    filled("text", "tenth"),
+  ]],
+  [15, 0, [
+    headings("Point", "Saturation", "Air voids"),
+    units("", "%", "%"),
+    ...LAB_A.map((_, i): Entry[] => [
+      number(i + 1, "whole"),
+      ...(i === 0 ? [formula("TAMP.SATPCT(K8:K12,I8:I12,D3)", "tenth"), formula("TAMP.AIRPCT(K8:K12,I8:I12,D3)", "tenth")] : filled("tenth", "tenth")),
+    ]),
   ]],
 );
 
@@ -96,8 +109,8 @@ const labB = sheet("Lab B", [28, 12, 12, 12, 12, 12, 3, 30, 14, 13, 13], 0,
     [text("Point", "heading"), ...[1, 2, 3, 4, 5].map((n) => number(n, "whole"))],
     [text("Water content (%)"), ...WATER_B.map((w) => number(w))],
     [text("Wet unit weight (lb/ft³)"), ...WET_B.map((d) => number(d))],
-    [text("Dry unit weight (lb/ft³)"), formula("TAMP.SOILDRY(B6:F6,B5:F5)", "tenth")],
-    [text("Zero air voids (lb/ft³)"), formula('TAMP.VOIDFREE(B5:F5,B10,"lb/ft3")', "tenth")],
+    [text("Dry unit weight (lb/ft³)"), formula("TAMP.SOILDRY(B6:F6,B5:F5)", "tenth"), ...filled("tenth", "tenth", "tenth", "tenth")],
+    [text("Zero air voids (lb/ft³)"), formula('TAMP.VOIDFREE(B5:F5,B10,"lb/ft3")', "tenth"), ...filled("tenth", "tenth", "tenth", "tenth")],
     [],
     [text("Specific gravity, assumed"), number(2.67, "hundredth")],
     [],
@@ -105,12 +118,12 @@ const labB = sheet("Lab B", [28, 12, 12, 12, 12, 12, 3, 30, 14, 13, 13], 0,
     [text("Optimum water content (%)"), formula('TAMP.PEAKWATER(B5:F5,B7:F7,"auto",B10,"lb/ft3")', "tenth")],
     [],
     [text("On the fitted curve", "heading"), ...[8, 10, 12, 14].map((w) => number(w, "tenth"))],
-    [text("Dry unit weight (lb/ft³)"), formula('TAMP.CURVEDRY(B15:E15,B5:F5,B7:F7,"auto",B10,"lb/ft3")', "tenth")],
+    [text("Dry unit weight (lb/ft³)"), formula('TAMP.CURVEDRY(B15:E15,B5:F5,B7:F7,"auto",B10,"lb/ft3")', "tenth"), ...filled("tenth", "tenth", "tenth")],
   ]],
 );
 
 const LAB_C = [[12.0, 16.6], [14.1, 17.24], [16.0, 17.6], [18.2, 17.52], [20.1, 17.34]] as const;
-const labC = sheet("Lab C", [10, 16, 16, 14, 16, 3, 12, 22, 80], 5,
+const labC = sheet("Lab C", [16, 15, 16, 14, 12, 3, 13, 14, 110], 5,
   [0, 0, [
     [text("Lab C: clay, light compaction, as a contractor reported it", "title")],
     [text("Invented data. One of these points cannot be right at the specific gravity stated: find it.", "note")],
@@ -119,11 +132,11 @@ const labC = sheet("Lab C", [10, 16, 16, 14, 16, 3, 12, 22, 80], 5,
     units("", "%", "kN/m³", "", ""),
     ...LAB_C.map(([w, dry], i): Entry[] => [
       number(i + 1, "whole"), number(w), number(dry),
-      ...(i === 0 ? [formula('TAMP.PASTZAV(C6:C10,B6:B10,B3,"kN/m3")', "text"), formula('TAMP.LEASTGS(C6:C10,B6:B10,"kN/m3")', "hundredth")] : []),
+      ...(i === 0 ? [formula('TAMP.PASTZAV(C6:C10,B6:B10,B3,"kN/m3")', "text"), formula('TAMP.LEASTGS(C6:C10,B6:B10,"kN/m3")', "hundredth")] : filled("text", "hundredth")),
     ]),
   ]],
   [3, 6, [
-    headings("What to look at"),
+    headings("What to look at", "", ""),
     [formula('TAMP.CURVEFLAGS(B6:B10,C6:C10,"auto",B3,"kN/m3")', "text")],
   ]],
 );
@@ -132,7 +145,7 @@ const FIELD = [
   ["F1", "0+020", 2.047, 14.6], ["F2", "0+040", 2.012, 13.1], ["F3", "0+060", 2.061, 15.2], ["F4", "0+080", 1.969, 12.4],
   ["F5", "0+100", 2.033, 16.8], ["F6", "0+120", 2.054, 14.1],
 ] as const;
-const field = sheet("Field", [8, 12, 14, 14, 14, 14, 14, 16, 14], 6,
+const field = sheet("Field", [8, 12, 13, 14, 12, 20, 14, 12, 12], 6,
   [0, 0, [
     [text("Field tests on the lean clay, against Lab A", "title")],
     [text("Invented data. Relative compaction and distance from optimum follow the fitted peak of Lab A.", "note")],
@@ -145,11 +158,11 @@ const field = sheet("Field", [8, 12, 14, 14, 14, 14, 14, 16, 14], 6,
       ...(i === 0 ? [
         formula("TAMP.SOILDRY(C7:C12,D7:D12)", "thousandth"), formula("TAMP.RELCOMP(E7:E12,C3)", "tenth"), formula("TAMP.WATERGAP(D7:D12,C4)", "tenth"),
         formula("TAMP.SATPCT(E7:E12,D7:D12,'Lab A'!D3)", "tenth"), formula("TAMP.AIRPCT(E7:E12,D7:D12,'Lab A'!D3)", "tenth"),
-      ] : []),
+      ] : filled("thousandth", "tenth", "tenth", "tenth", "tenth")),
     ]),
   ]],
   [14, 0, [
-    headings("Next lift"),
+    headings("Next lift", "", "", ""),
     [text("Volume of compacted fill, m³"), null, null, number(1200, "input")],
     [text("Dry density of the fill, Mg/m³"), null, null, formula("0.97*C3", "thousandth")],
     [text("Dry density in the borrow, Mg/m³"), null, null, number(1.62, "input")],

@@ -1,0 +1,48 @@
+import { curveWords, type CurveWord } from "../../src/compaction/fit";
+import { roles, type Corrections, type Role } from "../../src/tables/table";
+
+/** What the user chose for one table. It travels in the workbook, by sheet and range. */
+export interface Choices {
+  readonly corrections: Corrections;
+  readonly curve: CurveWord;
+  /** as typed; null takes what stands in the sheet, "" is none */
+  readonly specificGravity: string | null;
+  /** null takes what the sheet says of it */
+  readonly assumed: boolean | null;
+  /** density of water as typed; "" is that of water at 20 °C in the table's unit */
+  readonly waterDensity: string;
+}
+
+export const noChoices: Choices = { corrections: {}, curve: "auto", specificGravity: null, assumed: null, waterDensity: "" };
+
+export const writeChoices = (choices: Choices): string => JSON.stringify({ version: 1, ...choices });
+
+const isRecord = (value: unknown): value is Record<string, unknown> => typeof value === "object" && value !== null && !Array.isArray(value);
+
+function record<T>(value: unknown, good: (entry: unknown) => entry is T): Record<number, T> {
+  const out: Record<number, T> = {};
+  if (isRecord(value)) for (const [key, entry] of Object.entries(value)) if (/^\d{1,4}$/.test(key) && good(entry)) out[Number(key)] = entry;
+  return out;
+}
+
+const isRole = (value: unknown): value is Role => roles.includes(value as Role);
+const isText = (value: unknown): value is string => typeof value === "string" && value.length <= 40;
+
+/** Reads remembered choices. A workbook may come from anyone: what is not understood is left out. */
+export function readChoices(text: string | null): Choices {
+  let read: unknown;
+  try { read = text === null ? null : JSON.parse(text); } catch { return noChoices; }
+  if (!isRecord(read)) return noChoices;
+  const corrections = isRecord(read["corrections"]) ? read["corrections"] : {};
+  const { orientation } = corrections;
+  return {
+    corrections: {
+      ...(orientation === "down" || orientation === "across" ? { orientation } : {}),
+      roles: record(corrections["roles"], isRole), units: record(corrections["units"], isText),
+    },
+    curve: curveWords.find((word) => word === read["curve"]) ?? "auto",
+    specificGravity: isText(read["specificGravity"]) ? read["specificGravity"] : null,
+    assumed: typeof read["assumed"] === "boolean" ? read["assumed"] : null,
+    waterDensity: isText(read["waterDensity"]) ? read["waterDensity"] : "",
+  };
+}
