@@ -69,6 +69,8 @@ function buttons(desk: Desk): void {
   element("undo").addEventListener("click", () => desk.undo());
   element("redo").addEventListener("click", () => desk.redo());
   element("notice-close").addEventListener("click", closeNotice);
+  // a click leaves the typing where it was, in the grid; the keyboard reaches the buttons all the same
+  for (const button of document.querySelectorAll(".tools button")) button.addEventListener("mousedown", (event) => event.preventDefault());
   addEventListener("keydown", (event) => {
     if (!(event.ctrlKey || event.metaKey) || event.altKey) return;
     const key = event.key.toLowerCase();
