@@ -2,7 +2,7 @@
  * The example workbook's contents: an invented job, with no real place, firm or person behind it.
  * Readings are typed; everything that can be computed is a live formula.
  */
-export type Style = "title" | "note" | "heading" | "unit" | "text" | "input" | "whole" | "tenth" | "hundredth" | "thousandth" | "percent";
+export type Style = "title" | "note" | "heading" | "unit" | "text" | "input" | "whole" | "tenth" | "hundredth" | "thousandth";
 
 export type Entry =
   | null

@@ -16,7 +16,9 @@ export interface PeakChoices {
 export interface PeakFormulas {
   /** one formula that needs no cells in between; null where each point has its own count of tins */
   readonly single: string | null;
-  /** rows of contents for the top left corner given; the fit's formula stands at `peakAt` rows below it */
+  /** rows that stand above the fit: a heading, a row a point, and one of air; none where one formula does */
+  readonly rowsBefore: number;
+  /** rows of contents for the top left corner given; `reaches` is what the fit's formula fills */
   block(at: Place, reaches: { rows: number; columns: number }): (Content | null)[][];
 }
 
@@ -30,6 +32,7 @@ export function peakFormulas(table: Table, choices: PeakChoices, fromSheet: stri
   const single = waters === null ? null : peak(waters, writer.dries(waters));
   return {
     single,
+    rowsBefore: single === null ? table.groups.length + 2 : 0,
     block(at, reaches) {
       if (single !== null) return [[{ formula: single, reaches }]];
       const first = at.row + 1, last = at.row + table.groups.length;

@@ -5,7 +5,7 @@ import { massUnits, volumeUnits } from "../units/mass-and-volume-units";
 import { WATER_KG_M3_AT_20 } from "../units/water-density";
 import { looksLikeFractions } from "../worksheet/readers";
 import { wetDensityKgM3 } from "./arithmetic";
-import { blankAt, type Grid } from "./grid";
+import { blankAt, isPercentFormat, type Grid } from "./grid";
 import type { MouldUnits } from "./mould-units";
 import { nameOf, readCell, ROLE_NAMES, type ReadingRole } from "./readings";
 import type { GivenOnce, Place, Problem, Role, Series, Table, TablePoint } from "./table";
@@ -92,6 +92,11 @@ function readPoint(reading: Reading, { at, moreTins }: PointPlaces, problems: Pr
     for (const { index, asFraction } of cellsOf(role, position)) {
       const cell = grid.place(index, position);
       if (blankAt(grid, index, position)) { problems.push(blankBeside(reading, role, cell, at)); whole = false; continue; }
+      if (role === "waterContent" && !asFraction && isPercentFormat(grid.format(index, position)) && typeof grid.value(index, position) === "number") {
+        problems.push({ cell, says: `${nameOf(cell)} is formatted as % and so holds the fraction ${String(grid.value(index, position))}, while other water contents are percents: give all of them one format.` });
+        whole = false;
+        continue;
+      }
       const read = readCell(grid.value(index, position), cell, role, asFraction);
       if (typeof read === "number") out.push({ value: read, cell });
       else { problems.push(read); whole = false; }

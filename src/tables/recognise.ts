@@ -3,7 +3,7 @@ import { WATER_KG_M3_AT_20 } from "../units/water-density";
 import type { Area, Snapshot } from "../workbook/port";
 import { settle, type Readings } from "./arithmetic";
 import { findGivenOnce, findSpecificGravity, findUnitInTitles } from "./given-once";
-import { gridOf, isPercentFormat, numberAt, textAt, type Grid } from "./grid";
+import { blankAt, gridOf, isPercentFormat, numberAt, type Grid } from "./grid";
 import { KIND } from "./headings";
 import { bodyPositions, layoutOf, type Layout } from "./layout";
 import { settleMouldUnits, type MouldUnits } from "./mould-units";
@@ -50,10 +50,13 @@ export function recogniseTable(snapshot: Snapshot, corrections: Corrections = {}
   const mouldMass = once("mouldMass"), mouldVolume = once("mouldVolume");
 
   const columns = (role: Role): Draft[] => series.filter((one) => one.role === role);
-  const water = columns("waterContent").length > 0 ? "column" : columns("wetAndTin").length > 0 && columns("dryAndTin").length > 0 ? "tins" : null;
+  // a column that has its heading but no figure yet gives way to the readings that it would be computed from
+  const holds = (role: Role): boolean => columns(role).some(({ index }) => positions.some((position) => !blankAt(grid, index, position)));
+  const hasTins = columns("wetAndTin").length > 0 && columns("dryAndTin").length > 0;
+  const water = columns("waterContent").length > 0 && (holds("waterContent") || !hasTins) ? "column" : hasTins ? "tins" : null;
   const hasMould = (columns("wetSoil").length > 0 || (columns("mouldAndSoil").length > 0 && (columns("mouldMass").length > 0 || mouldMass !== null)))
     && (columns("mouldVolume").length > 0 || mouldVolume !== null);
-  const dry = columns("dryDensity").length > 0 ? "column" : columns("wetDensity").length > 0 ? "wet density" : hasMould ? "mould" : null;
+  const dry = holds("dryDensity") ? "column" : holds("wetDensity") ? "wet density" : hasMould ? "mould" : columns("dryDensity").length > 0 ? "column" : columns("wetDensity").length > 0 ? "wet density" : null;
 
   if (positions.length > 0) sayWhatIsMissing(series, water, dry, mouldMass, mouldVolume, problems);
   if (water === "tins" && columns("tare").length === 0)
@@ -271,11 +274,3 @@ function bodyArea(area: Area, grid: Grid, series: readonly Series[], positions: 
   const corners = [grid.place(used[0]!.index, positions[0]!), grid.place(used.at(-1)!.index, positions.at(-1)!)];
   return { sheet: area.sheet, row: corners[0]!.row, column: corners[0]!.column, rows: corners[1]!.row - corners[0]!.row + 1, columns: corners[1]!.column - corners[0]!.column + 1 };
 }
-
-/** The first text of a selection, to speak of an empty one. */
-export const isEmptySelection = (snapshot: Snapshot): boolean => {
-  const grid = gridOf(snapshot, "down");
-  for (let position = 0; position < grid.positions; position++)
-    for (let series = 0; series < grid.series; series++) if (numberAt(grid, series, position) !== undefined || textAt(grid, series, position) !== "") return false;
-  return true;
-};
