@@ -101,12 +101,12 @@ const labA = sheet("Lab A", [7, 16, 9, 13, 8, 10, 10, 9, 14, 12, 12, 3, 29, 20, 
 );
 
 const WATER_B = [7.1, 9.0, 11.2, 13.1, 15.0], WET_B = [124.2, 130.1, 134.9, 134.2, 131.3];
-const labB = sheet("Lab B", [28, 12, 12, 12, 12, 12, 3, 30, 14, 13, 13], 0,
+const labB = sheet("Lab B", [33, 12, 12, 12, 12, 12, 3, 30, 14, 13, 13], 0,
   [0, 0, [
     [text("Lab B: silty sand, standard effort", "title")],
     [text("Invented data in US units. Points run across the columns.", "note")],
     [],
-    [text("Point", "heading"), ...[1, 2, 3, 4, 5].map((n) => number(n, "whole"))],
+    [text("Point", "unit"), ...[1, 2, 3, 4, 5].map((n) => number(n, "whole"))],
     [text("Water content (%)"), ...WATER_B.map((w) => number(w))],
     [text("Wet unit weight (lb/ft³)"), ...WET_B.map((d) => number(d))],
     [text("Dry unit weight (lb/ft³)"), formula("TAMP.SOILDRY(B6:F6,B5:F5)", "tenth"), ...filled("tenth", "tenth", "tenth", "tenth")],
@@ -117,7 +117,7 @@ const labB = sheet("Lab B", [28, 12, 12, 12, 12, 12, 3, 30, 14, 13, 13], 0,
     [text("Maximum dry unit weight (lb/ft³)"), formula('TAMP.PEAKDRY(B5:F5,B7:F7,"auto",B10,"lb/ft3")', "tenth")],
     [text("Optimum water content (%)"), formula('TAMP.PEAKWATER(B5:F5,B7:F7,"auto",B10,"lb/ft3")', "tenth")],
     [],
-    [text("On the fitted curve", "heading"), ...[8, 10, 12, 14].map((w) => number(w, "tenth"))],
+    [text("Water content on the curve (%)"), ...[8, 10, 12, 14].map((w) => number(w, "tenth"))],
     [text("Dry unit weight (lb/ft³)"), formula('TAMP.CURVEDRY(B15:E15,B5:F5,B7:F7,"auto",B10,"lb/ft3")', "tenth"), ...filled("tenth", "tenth", "tenth")],
   ]],
 );
@@ -145,7 +145,7 @@ const FIELD = [
   ["F1", "0+020", 2.047, 14.6], ["F2", "0+040", 2.012, 13.1], ["F3", "0+060", 2.061, 15.2], ["F4", "0+080", 1.969, 12.4],
   ["F5", "0+100", 2.033, 16.8], ["F6", "0+120", 2.054, 14.1],
 ] as const;
-const field = sheet("Field", [8, 12, 13, 14, 12, 20, 14, 12, 12], 6,
+const field = sheet("Field", [12, 14, 16, 14, 14, 20, 14, 12, 12], 6,
   [0, 0, [
     [text("Field tests on the lean clay, against Lab A", "title")],
     [text("Invented data. Relative compaction and distance from optimum follow the fitted peak of Lab A.", "note")],
@@ -162,7 +162,7 @@ const field = sheet("Field", [8, 12, 13, 14, 12, 20, 14, 12, 12], 6,
     ]),
   ]],
   [14, 0, [
-    headings("Next lift", "", "", ""),
+    [text("Water and borrow for the next lift", "title")],
     [text("Volume of compacted fill, m³"), null, null, number(1200, "input")],
     [text("Dry density of the fill, Mg/m³"), null, null, formula("0.97*C3", "thousandth")],
     [text("Dry density in the borrow, Mg/m³"), null, null, number(1.62, "input")],

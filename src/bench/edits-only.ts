@@ -4,7 +4,7 @@ import type { Api } from "../engine/library";
  * Commands of the engine that change more than what cells hold. Saving patches cells into the user's own file,
  * so what cannot be saved is not offered: it is refused with a word on where to do it.
  */
-const STRUCTURE = /^sheet\.command\.(?:insert-(?!defined)|remove-(?!defined)|delete-(?!defined)|move-(?:rows|cols|range)|copy-sheet|append-row|reorder-range|split-text|set-worksheet-(?!activate|permission|protection)|set-(?:rows|col|selected|specific)[a-z-]*(?:hidden|visible)|set-tab-color|add-worksheet|set-frozen|cancel-frozen|delta-|set-row-|set-col-)/;
+const STRUCTURE = /^sheet\.command\.(?:insert-(?!defined)|remove-(?!defined)|delete-(?!defined|conditional|note)|move-(?:rows|cols|range)|copy-sheet|append-row|reorder-range|split-text|set-worksheet-(?!activate|permission|protection)|set-(?:rows|col|selected|specific)[a-z-]*(?:hidden|visible)|set-tab-color|add-worksheet|set-frozen|cancel-frozen|delta-|set-row-|set-col-)/;
 const FORMAT = /^(?:sheet\.command\.(?:set-(?:style|bold|italic|underline|stroke|overline|font|text|background|border|vertical|horizontal|range-custom)|reset-|numfmt|clear-selection-(?:all|format)|toggle-gridlines|set-gridlines|set-once-format|apply-format)|sheet\.command\.numfmt)/;
 
 /** Refuses such commands while `loading` is false; `tell` says so. */

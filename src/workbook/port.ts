@@ -73,5 +73,9 @@ export interface WorkbookPort {
 
 export type PortEvent = "selection" | "change";
 
-/** Every mark's formula and every note of ours start so. */
+/** Every mark's formula and every note of ours carry this name. */
 export const SIGNATURE = "Tampsheet";
+
+/** A mark's formula is true in every cell and says whose it is, in a form that other programs leave alone when they save. */
+export const markFormula = (kind: MarkKind): string => `"${SIGNATURE}:${kind}"<>""`;
+export const markKindOf = (formula: string): MarkKind | undefined => new RegExp(`"${SIGNATURE}:(past-line|doubtful|ask)"`).exec(formula)?.[1] as MarkKind | undefined;

@@ -1,11 +1,12 @@
 import { densityUnits } from "../../src/units/density-units";
 import { massUnits, volumeUnits } from "../../src/units/mass-and-volume-units";
 import { KIND, type UnitKind } from "../../src/tables/headings";
+import { ROLE_NAMES } from "../../src/tables/readings";
 import { roles, type Known, type Role, type Series, type Table } from "../../src/tables/table";
 import { columnName } from "../../src/workbook/address";
 import { h } from "../parts/dom";
 import type { Choices } from "./choices";
-import { ROLE_NAMES, type Look } from "./model";
+import type { Look } from "./model";
 
 /** Only what does not stand in the heading is said. */
 const KNOWN_WORDS: Readonly<Record<Known, string>> = {

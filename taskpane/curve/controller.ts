@@ -71,7 +71,8 @@ export class CurveController {
   private async follow(pending: ReadonlySet<PortEvent>): Promise<void> {
     const before = this.snapshot;
     if (pending.has("selection")) await this.followSelection();
-    if (pending.has("change") && (this.snapshot === before || !pending.has("selection"))) await this.followChange();
+    // a table that the selection has just brought is fresh already
+    if (pending.has("change") && this.snapshot === before) await this.followChange();
   }
 
   private hostFailed(error: unknown): void {
@@ -86,13 +87,14 @@ export class CurveController {
     if (turn !== this.turn) return;
     const cut = used && intersection(selected, used);
     const lone = selected.rows === 1 && selected.columns === 1;
-    // a click on a cell (to edit it, or from a finding here) does not lose the table that is shown
-    if (lone && this.snapshot && overlap(selected, this.snapshot.area)) return;
-    if (!cut) return lone && this.look ? undefined : this.say(turn, "The selected cells are empty. Select a laboratory test: its two columns, or the whole table with its headings.");
+    // a click on a cell (to edit it, or from a finding here) does not lose the table that is shown; it is read again,
+    // since another workbook may have been opened meanwhile
+    if (lone && this.snapshot && overlap(selected, this.snapshot.area)) return this.followChange();
+    if (!cut) return lone && this.look ? this.followChange() : this.say(turn, "The selected cells are empty. Select a laboratory test: its two columns, or the whole table with its headings.");
     if (cut.rows * cut.columns > MOST_CELLS) return this.say(turn, `The selection holds ${(cut.rows * cut.columns).toLocaleString("en")} cells. Select one test at a time.`);
     const snapshot = lone ? await this.regionAround(cut, used) : await this.withHeadings(cut, used);
     if (turn !== this.turn || snapshot === null) return;
-    if (lone && this.look && !isTest(recogniseTable(snapshot))) return;
+    if (lone && this.look && !isTest(recogniseTable(snapshot))) return this.followChange();
     await this.take(turn, snapshot);
   }
 
@@ -220,13 +222,13 @@ export class CurveController {
   async write(address: string, reaches: { rows: number; columns: number }): Promise<void> {
     const { look, snapshot } = this;
     if (!look?.fit || !snapshot) return;
-    const at = address.trim() === "" ? await this.freePlace(look.table, reaches) : parseRange(address.trim());
-    if (!at) return this.view.announce(`"${address.trim()}" is not a cell of this sheet: type one such as ${cellName(look.table.area.row, look.table.area.column + look.table.area.columns + 1)}, or leave it empty.`);
     const { sheet } = snapshot.area;
     const { specificGravity, choices } = look;
     const water = look.water.trouble === null ? typedNumber(choices.waterDensity) ?? null : null;
     const formulas = peakFormulas(look.table, { curve: choices.curve, specificGravity: specificGravity.value, waterDensity: water }, sheet);
     if (!formulas) return this.view.announce("There is nothing to write for this table.");
+    const at = address.trim() === "" ? await this.freePlace(look.table, { rows: formulas.rowsBefore + reaches.rows, columns: reaches.columns }) : parseRange(address.trim());
+    if (!at) return this.view.announce(`"${address.trim()}" is not a cell of this sheet: type one such as ${cellName(look.table.area.row, look.table.area.column + look.table.area.columns + 1)}, or leave it empty.`);
     const placements: Placement[] = [{ sheet, row: at.row, column: at.column, cells: formulas.block(at, reaches) }];
     await this.send(placements, [], cellName(at.row, at.column));
   }
@@ -257,14 +259,13 @@ export class CurveController {
     this.view.announce("Nothing was written.");
   }
 
-  private async freePlace(table: Table, reaches: { rows: number; columns: number }): Promise<Place> {
+  private async freePlace(table: Table, size: { rows: number; columns: number }): Promise<Place> {
     const { area } = table;
     const used = await this.usedPart(area.sheet) ?? area;
-    const bottom = Math.max(used.row + used.rows, area.row + area.rows) + reaches.rows, right = Math.max(used.column + used.columns, area.column + area.columns) + reaches.columns;
+    const bottom = Math.max(used.row + used.rows, area.row + area.rows) + size.rows, right = Math.max(used.column + used.columns, area.column + area.columns) + size.columns;
     const around = await this.port.read({ sheet: area.sheet, row: area.row === 0 ? 0 : area.row - 1, column: area.column, rows: Math.min(bottom - area.row + 1, 400), columns: Math.min(right - area.column, 60) });
     const filled = (row: number, column: number): boolean => around.ok && !isBlank(around.value.values[row - around.value.area.row]?.[column - around.value.area.column]);
-    const helper = table.groups.some(({ length }) => length > 1) ? table.groups.length + 2 : 0;
-    return freeBlock(area, { rows: reaches.rows + helper, columns: reaches.columns }, filled, used.row + used.rows - 1);
+    return freeBlock(area, size, filled, used.row + used.rows - 1);
   }
 }
 

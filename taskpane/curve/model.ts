@@ -3,7 +3,6 @@ import type { Finding, Severity } from "../../src/findings/finding";
 import { airVoidsLine, leastSpecificGravity, zeroAirVoids } from "../../src/phase/lines";
 import { quantity } from "../../src/relations/quantities";
 import { recogniseTable } from "../../src/tables/recognise";
-import { ROLE_NAMES } from "../../src/tables/readings";
 import type { Place, Table } from "../../src/tables/table";
 import { unitOfWater, type DensityUnit } from "../../src/units/density-units";
 import { WATER_KG_M3_AT_20 } from "../../src/units/water-density";
@@ -205,4 +204,3 @@ export function plotWords(look: Look): string {
 
 export const CURVE_NAMES: Readonly<Record<CurveWord, string>> = { auto: "Automatic", parabola: "Parabola", cubic: "Cubic", "top three": "Top three points" };
 export const SEVERITY_WORDS: Readonly<Record<Severity, string>> = { impossible: "Not possible", doubtful: "Doubtful", ask: "Question" };
-export { ROLE_NAMES };

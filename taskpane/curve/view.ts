@@ -1,4 +1,3 @@
-import type { CurveWord } from "../../src/compaction/fit";
 import { areaName, rangeName } from "../../src/workbook/address";
 import { h, refill } from "../parts/dom";
 import { copyText } from "../parts/copy";
@@ -110,7 +109,7 @@ export class CurveView implements View {
 
 function noFitBox(look: Look): HTMLElement {
   const says = look.noFit!.says;
-  return h("div", { class: "no-fit" }, h("h2", {}, look.choices.curve === "auto" ? "No peak is shown" : `No peak by ${CURVE_NAMES[look.choices.curve as CurveWord].toLowerCase()}`), h("p", {}, tied(says.charAt(0).toUpperCase() + says.slice(1))));
+  return h("div", { class: "no-fit" }, h("h2", {}, look.choices.curve === "auto" ? "No peak is shown" : `No peak by ${CURVE_NAMES[look.choices.curve].toLowerCase()}`), h("p", {}, tied(says.charAt(0).toUpperCase() + says.slice(1))));
 }
 
 function emptyState(instead: string): HTMLElement[] {

@@ -63,6 +63,21 @@ describe("percent and fraction", () => {
   });
 });
 
+test("one cell formatted as % among percents is named, not guessed", () => {
+  const table = recogniseTable(sheet(rows(["Water content", 8.9, percent(0.101), 11.4, 13], ["Dry density", ...D])));
+  expect(table.problems).toEqual([{ cell: { row: 2, column: 0 }, says: expect.stringContaining("A3 is formatted as %") }]);
+  expect(table.points).toHaveLength(3);
+});
+
+test("headed columns that are still empty give way to the raw readings", () => {
+  const table = recogniseTable(sheet([
+    ["Mould + soil (g)", "Mass of mould (g)", "Volume of mould (cm3)", "Wet + tin", "Dry + tin", "Tare", "Water content (%)", "Wet density", "Dry density"],
+    [6116, 4196, 1000, 58.31, 54.54, 17.62, null, null, null], [6222, 4196, 1000, 61.72, 56.78, 16.59, null, null, null],
+  ]));
+  expect(table).toMatchObject({ waterFrom: "tins", dryFrom: "mould", problems: [] });
+  expect(table.points).toHaveLength(2);
+});
+
 describe("short forms that mean several things", () => {
   test("the arithmetic tells wet from dry where both say density", () => {
     const table = recogniseTable(sheet(rows(["MC (%)", ...W], ["Density", ...wet], ["Density", ...D])));

@@ -3,7 +3,7 @@ import { messageKey } from "../../engine/messages";
 import type { PageEngine } from "../../engine/page";
 import { CellError, type Cell } from "../../worksheet/cell";
 import { areaName, overlap } from "../address";
-import { SIGNATURE, type Area, type Content, type Done, type Mark, type MarkKind, type PortEvent, type Snapshot, type Why, type WorkbookPort } from "../port";
+import { markFormula, markKindOf, SIGNATURE, type Area, type Content, type Done, type Mark, type MarkKind, type PortEvent, type Snapshot, type Why, type WorkbookPort } from "../port";
 import type { EngineRange, FaceRule, FaceWorksheet, OpenWorkbook } from "./engine-face";
 
 const PATIENCE_MS = 30_000;
@@ -18,12 +18,7 @@ const LOOKS: Readonly<Record<MarkKind, { readonly fill: string; readonly ink: st
 const refused = (why: Why, where: readonly Area[], says: string): { ok: false; why: Why; where: readonly Area[]; says: string } => ({ ok: false, why, where, says });
 const done = <T>(value: T): Done<T> => ({ ok: true, value });
 
-/** A mark's formula is always true and says whose it is. */
-export const markFormula = (kind: MarkKind): string => `=OR(TRUE,"${SIGNATURE}:${kind}"="")`;
-export const kindOfRule = ({ rule }: FaceRule): MarkKind | undefined => {
-  const match = typeof rule.value === "string" ? new RegExp(`"${SIGNATURE}:([a-z-]+)"`).exec(rule.value) : null;
-  return match ? match[1] as MarkKind : undefined;
-};
+export const kindOfRule = ({ rule }: FaceRule): MarkKind | undefined => typeof rule.value === "string" ? markKindOf(rule.value) : undefined;
 
 export interface BenchPort extends WorkbookPort {
   /** tells the pane that something is so now: another workbook, another selection, another value */
@@ -140,7 +135,7 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
       for (const { area } of marks) if (!sheetOf(area.sheet)) return gone(area);
       for (const mark of marks) {
         const sheet = sheetOf(mark.area.sheet)!;
-        addMark(sheet, mark);
+        if (!isMarked(sheet, mark)) addMark(sheet, mark);
         if (!mark.note) continue;
         const first = sheet.getRange(mark.area.row, mark.area.column), note = first.getNote();
         if (note && !note.note.startsWith(SIGNATURE)) notesLeftOut.push({ ...mark.area, rows: 1, columns: 1 });
@@ -153,11 +148,9 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
       let removed = 0;
       for (const sheet of open().workbook.getSheets()) {
         if (name !== null && sheet.getSheetName() !== name) continue;
-        for (const rule of [...sheet.getConditionalFormattingRules()]) {
-          if (!kindOfRule(rule)) continue;
-          sheet.deleteConditionalFormattingRule(rule.cfId);
-          removed++;
-        }
+        const before = sheet.getConditionalFormattingRules().filter(kindOfRule);
+        for (const rule of before) sheet.deleteConditionalFormattingRule(rule.cfId);
+        removed += before.length - sheet.getConditionalFormattingRules().filter(kindOfRule).length;
         for (const note of [...sheet.getNotes()]) if (note.note.startsWith(SIGNATURE)) sheet.getRange(note.row, note.col).deleteNote();
       }
       return done({ removed });
@@ -211,6 +204,10 @@ function contentOf(content: Content): object {
   return { ...CLEAR, v: typeof value === "boolean" ? Number(value) : value, t: typeof value === "number" ? 2 : typeof value === "boolean" ? 3 : 1 };
 }
 
+/** Marking twice is marking once. */
+const isMarked = (sheet: FaceWorksheet, { area, kind }: Mark): boolean => sheet.getConditionalFormattingRules().some((rule) =>
+  kindOfRule(rule) === kind && rule.ranges.some((range) => areaName(areaOf(area.sheet, range)) === areaName(area)));
+
 let marks = 0;
 
 /** Marks keep the user's own fill in the cell: the engine lays them over it and takes them off again. */
@@ -220,7 +217,7 @@ export function addMark(sheet: FaceWorksheet, { area, kind }: Pick<Mark, "area" 
     cfId: `${SIGNATURE}-${Date.now().toString(36)}-${marks++}`,
     ranges: [{ startRow: area.row, endRow: area.row + area.rows - 1, startColumn: area.column, endColumn: area.column + area.columns - 1 }],
     stopIfTrue: false,
-    rule: { type: "highlightCell", subType: "formula", value: markFormula(kind), style: { bg: { rgb: fill }, cl: { rgb: ink } } },
+    rule: { type: "highlightCell", subType: "formula", value: `=${markFormula(kind)}`, style: { bg: { rgb: fill }, cl: { rgb: ink } } },
   });
 }
 

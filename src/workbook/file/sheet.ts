@@ -1,5 +1,5 @@
 import { parseRange } from "../address";
-import { SIGNATURE, type MarkKind } from "../port";
+import { markKindOf, SIGNATURE } from "../port";
 import { BookRefusal, type BookCell, type BookMark, type BookNote, type BookSheet, type Rectangle } from "./book";
 import { fromStored, moved } from "./formula-text";
 import { MOST_COLUMNS, MOST_ROWS } from "./limits";
@@ -16,8 +16,6 @@ export interface Surroundings {
   /** counts cells over all sheets, so that the limit is the workbook's */
   readonly count: { cells: number };
 }
-
-const MARK = new RegExp(`^OR\\(TRUE,"${SIGNATURE}:([a-z-]+)"=""\\)$`);
 
 /** Columns wider than this many are a whole-sheet format, not columns that someone set. */
 const SET_COLUMNS = 256;
@@ -92,8 +90,8 @@ export function readSheet(pack: Package, { name, part, hidden, strings, count }:
       else if (tag === "v" && cell) cell.value = text;
       else if (tag === "t" && cell) cell.value = (cell.value ?? "") + text;
       else if (tag === "formula") {
-        const kind = MARK.exec(text)?.[1];
-        if (kind) marks.push({ kind: kind as MarkKind, ranges: markRanges });
+        const kind = markKindOf(text);
+        if (kind) marks.push({ kind, ranges: markRanges });
       } else if (tag === "c" && cell) {
         take(cell);
         cell = undefined;
