@@ -21,7 +21,7 @@ export function logGamma(x: number): number {
  */
 export function incompleteBeta(x: number, a: number, b: number, rest = 1 - x): number {
   if (x <= 0) return 0;
-  if (x >= 1) return 1;
+  if (rest <= 0) return 1;
   // the fraction converges fast on this side of the mean
   if (x > (a + 1) / (a + b + 2)) return 1 - incompleteBeta(rest, b, a, x);
   const front = Math.exp(a * Math.log(x) + b * Math.log(rest) + logGamma(a + b) - logGamma(a) - logGamma(b)) / a;

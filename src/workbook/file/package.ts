@@ -7,7 +7,7 @@ const startsWith = (bytes: Uint8Array, ...head: number[]): boolean => head.every
 /** A text of UTF-16 somewhere in the first part of a file, as an old compound file names its streams. */
 function namesStream(bytes: Uint8Array, name: string): boolean {
   const wanted = [...name].flatMap((letter) => [letter.charCodeAt(0), 0]), end = Math.min(bytes.length, 1 << 20) - wanted.length;
-  for (let i = 0; i < end; i++) if (wanted.every((byte, k) => bytes[i + k] === byte)) return true;
+  for (let i = 0; i <= end; i++) if (wanted.every((byte, k) => bytes[i + k] === byte)) return true;
   return false;
 }
 
