@@ -8,12 +8,14 @@ const FLAT = 0.001;
 
 const figure = (value: number): string => String(Number(value.toPrecision(4)));
 
-/** What stops any curve: too few points, or no spread in water content. */
+/** What stops any curve: too few points, or no spread in water content or in density. */
 export function tooLittle(test: CompactionTest): Reason | undefined {
   const n = test.waters.length, distinct = distinctWaters(test);
   if (n < 3) return { why: "too-few-points", says: `${n === 0 ? "there are no points" : n === 1 ? "there is one point" : "there are only two points"}: a peak needs at least three, and a test should have five.` };
   if (distinct === 1) return { why: "no-spread", says: `all ${n} points have the same water content, ${figure(test.waters[0]!)} %: a curve needs different ones.` };
   if (distinct < 3) return { why: "too-few-points", says: `the ${n} points have only two different water contents: a peak needs at least three.` };
+  const most = Math.max(...test.dries), least = Math.min(...test.dries);
+  if (most - least <= FLAT * most) return { why: "flat", says: `the dry densities are all alike, ${figure(least)} to ${figure(most)}: there is no peak to find. Clean sands are better judged by relative density.` };
   return undefined;
 }
 
@@ -22,8 +24,7 @@ export function whyNoPeak(test: CompactionTest, opensUpward: boolean): Reason {
   const { waters, dries } = test;
   const order = waters.map((_, i) => i).sort((a, b) => waters[a]! - waters[b]!);
   const driest = order[0]!, wettest = order[order.length - 1]!;
-  const most = Math.max(...dries), least = Math.min(...dries);
-  if (most - least <= FLAT * most) return { why: "flat", says: `the dry densities are all alike, ${figure(least)} to ${figure(most)}: there is no peak to find. Clean sands are better judged by relative density.` };
+  const most = Math.max(...dries);
   if (dries[wettest] === most) return { why: "rising", says: `dry density is highest at the wettest point, ${figure(waters[wettest]!)} %: the peak is not reached. Add points wetter than that.` };
   if (dries[driest] === most) return { why: "falling", says: `dry density is highest at the driest point, ${figure(waters[driest]!)} %: the peak is not reached. Add points drier than that.` };
   if (opensUpward) return { why: "valley", says: "the points form a valley, not a peak: check that water contents and dry densities are paired rightly, and that none was swapped. Clean sands that bulk are better judged by relative density." };

@@ -1,0 +1,84 @@
+import type { CompactionTest, CurveWord } from "../../../src/compaction/fit";
+import { fitTest } from "../../../src/compaction/fit-test";
+import { curveRules } from "../../../src/compaction/quality";
+import { COMMON_PRACTICE, type Place } from "../../../src/findings/finding";
+import { publishedTest } from "../../published/compaction-tests";
+
+interface Case { readonly test: CompactionTest; readonly curve?: CurveWord; readonly places?: readonly (number | "whole")[]; readonly says?: RegExp }
+
+const of = (waters: number[], dries: number[], more: Partial<CompactionTest> = {}): CompactionTest => ({ waters, dries, waterDensity: 1, ...more });
+/** a plain good test: five points on a parabola of 1.85 at 14 %, with a scatter of about 0.2 % */
+const waters = [10, 12, 14, 16, 18], dries = [1.771, 1.827, 1.853, 1.829, 1.773];
+const good = of(waters, dries, { specificGravity: 2.7 });
+const without = (i: number): CompactionTest => of(waters.filter((_, k) => k !== i), dries.filter((_, k) => k !== i));
+const longWaters = [9, 10, 11, 12, 13, 14, 15, 16, 17, 18, 19], longDries = longWaters.map((w, i) => 1.85 - 0.005 * (w - 14) ** 2 + 0.002 * Math.sin(7 * i));
+
+/** Every rule with cases that must fire (and where), and cases that must stay silent. */
+const cases: Readonly<Record<string, { fires: readonly Case[]; silent: readonly Case[] }>> = {
+  "past-line": {
+    fires: [
+      { test: of(waters, [1.771, 1.827, 1.853, 1.829, 1.84], { specificGravity: 2.7 }), places: [4], says: /1\.84 at 18 % lies past .* from a specific gravity of 2\.752 up/ },
+      { test: of(waters, [1.771, 1.827, 1.853, 1.829, 1.84], { specificGravity: 2.7, specificGravityAssumed: true }), places: [4], says: /assumed specific gravity/ },
+      { test: publishedTest("G"), places: [2, 3, 4] },
+    ],
+    silent: [{ test: good }, { test: of(waters, [1.771, 1.827, 1.853, 1.829, 1.84]) }, { test: of(waters, [1.771, 1.827, 1.853, 1.829, 1 / (0.18 + 1 / 2.7) * 1.0015], { specificGravity: 2.7 }) }],
+  },
+  "curve-past-line": {
+    fires: [{ test: publishedTest("N"), curve: "parabola", places: ["whole"], says: /crosses the zero-air-voids line from 14\.\d % on/ }],
+    silent: [{ test: good }, { test: { ...publishedTest("N"), specificGravity: undefined }, curve: "parabola" }, { test: { ...publishedTest("N"), specificGravity: 2.85 }, curve: "parabola" }],
+  },
+  "too-few-points": { fires: [{ test: without(4), places: ["whole"], says: /^4 points/ }, { test: of(waters.slice(1, 4), dries.slice(1, 4)), places: ["whole"], says: /^3 points/ }], silent: [{ test: good }] },
+  "not-bracketed": {
+    fires: [{ test: without(4), curve: "parabola", places: ["whole"], says: /only one point is wet/ }, { test: of([13, 15, 17, 19], [1.848, 1.85, 1.81, 1.73]), curve: "parabola", places: ["whole"], says: /only one point is dry/ }, { test: of([10, 12, 14], [1.77, 1.83, 1.85]), places: ["whole"], says: /no point is wet/ }],
+    silent: [{ test: good }],
+  },
+  gap: {
+    fires: [{ test: of([10, 12, 14, 18, 19], [1.771, 1.827, 1.853, 1.773, 1.725]), places: ["whole"], says: /from 14 to 18 %/ }, { test: publishedTest("H"), curve: "parabola", places: ["whole"], says: /7\.5 points/ }],
+    // a wide step far from the peak is no matter, and a soil with a high optimum takes wider steps
+    silent: [{ test: good }, { test: of([6, 10, 12, 14, 16, 18], [1.53, 1.771, 1.827, 1.853, 1.829, 1.773]) }, { test: of([22, 26, 30, 34, 38], [1.30, 1.36, 1.38, 1.36, 1.30]) }],
+  },
+  outlier: {
+    fires: [{ test: of(longWaters, longDries.map((dry, i) => i === 3 ? dry - 0.04 : dry)), curve: "parabola", places: [3], says: /below the curve/ }, { test: publishedTest("R"), curve: "parabola", places: [20, 23] }],
+    silent: [{ test: of(longWaters, longDries), curve: "parabola" }, { test: of(waters, [1.771, 1.80, 1.853, 1.829, 1.773]), curve: "parabola" }],
+  },
+  "stands-above": { fires: [{ test: publishedTest("A"), curve: "parabola", places: ["whole"] }, { test: publishedTest("A"), curve: "cubic", places: ["whole"] }], silent: [{ test: good }, { test: publishedTest("P"), curve: "parabola" }, { test: publishedTest("A"), curve: "top three" }] },
+  "misses-points": { fires: [{ test: publishedTest("E"), curve: "parabola", places: ["whole"], says: /misses the point at 14\.6 %/ }, { test: publishedTest("C"), curve: "cubic", places: ["whole"] }], silent: [{ test: good }, { test: publishedTest("L"), curve: "parabola" }, { test: publishedTest("E"), curve: "top three" }] },
+  "repeated-points": { fires: [{ test: of([...waters, 14], [...dries, 1.853]), places: [5] }], silent: [{ test: good }, { test: of([...waters, 14], [...dries, 1.855]) }] },
+  "gravity-implausible": { fires: [{ test: { ...good, specificGravity: 3.4 }, places: ["whole"] }, { test: { ...good, specificGravity: 2.3 }, places: ["whole"] }], silent: [{ test: good }, { test: of(waters, dries) }] },
+  "gravity-assumed": { fires: [{ test: { ...good, specificGravityAssumed: true }, places: ["whole"] }], silent: [{ test: good }, { test: of(waters, dries, { specificGravityAssumed: true }) }] },
+};
+
+const findings = ({ test, curve = "auto" }: Case) => {
+  const outcome = fitTest(test, curve);
+  return (outcome.ok ? outcome.fit : outcome.noFit).findings;
+};
+const placeOf = (place: Place): number | "whole" => place.at === "point" ? place.index : "whole";
+
+test("every rule has cases, and no case is without its rule", () => expect(Object.keys(cases).sort()).toEqual(curveRules.map(({ id }) => id).sort()));
+
+describe.each(curveRules.map((one) => [one.id, one] as const))("%s", (id, one) => {
+  const { fires, silent } = cases[id]!;
+  test("names its source", () => expect(one.source === COMMON_PRACTICE || one.source.title.length > 5).toBe(true));
+  test("fires where it must", () => {
+    expect(fires.length).toBeGreaterThan(0);
+    for (const [i, fire] of fires.entries()) {
+      const own = findings(fire).filter((finding) => finding.id === id);
+      expect([i, own.map(({ place }) => placeOf(place))]).toEqual([i, fire.places]);
+      for (const { says } of own) {
+        expect(says).not.toMatch(/[{}]|undefined|NaN|null/);
+        if (fire.says) expect(says).toMatch(fire.says);
+      }
+    }
+  });
+  test("stays silent where it must", () => {
+    expect(silent.length).toBeGreaterThan(0);
+    for (const [i, quiet] of silent.entries()) expect([i, findings(quiet).filter((finding) => finding.id === id)]).toEqual([i, []]);
+  });
+});
+
+test("a good test raises nothing at all", () => expect(findings({ test: good })).toEqual([]));
+test("the weightiest finding stands first", () => {
+  const weights = findings({ test: publishedTest("G"), curve: "parabola" }).map(({ severity }) => severity);
+  expect(weights[0]).toBe("impossible");
+  expect(weights).toEqual([...weights].sort((a, b) => ["impossible", "doubtful", "ask"].indexOf(a) - ["impossible", "doubtful", "ask"].indexOf(b)));
+});
