@@ -14,5 +14,14 @@ export async function findHost(): Promise<WorkbookPort | null> {
   if (typeof Office === "undefined" || typeof Office.onReady !== "function") return null;
   // outside the host its script answers with no host at all
   const { host } = await Office.onReady();
-  return host === Office.HostType.Excel ? officePort() : null;
+  if (host !== Office.HostType.Excel) return null;
+  loadFunctions();
+  return officePort();
+}
+
+/** In the office host one page holds the pane and the worksheet functions: the shared runtime of the manifest. */
+function loadFunctions(): void {
+  const script = document.createElement("script");
+  script.src = "functions.js";
+  document.head.append(script);
 }

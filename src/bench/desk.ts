@@ -126,6 +126,12 @@ export class Desk {
     this.news();
   }
 
+  /** What the workbook would be if it were saved now; nothing is taken as saved. */
+  preview(): Book {
+    const { book, bytes, workbook, settings } = this.opened();
+    return readBook(patchBook(bytes, changesSince(book, workbook, this.engine, settings)));
+  }
+
   /** The file as it now is: the user's own bytes with what has changed patched in. */
   save(): { readonly bytes: Uint8Array; readonly fileName: string } {
     const { book, bytes, workbook, fileName, settings } = this.opened();

@@ -160,7 +160,8 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
       const sheet = sheetOf(area.sheet);
       if (!sheet) return gone(area);
       if (beyond(sheet, area)) return refused("gone", [area], `${areaName(area)} lies beyond the sheet.`);
-      open().workbook.setActiveSheet(sheet);
+      const { workbook } = open();
+      if (workbook.getActiveSheet().getSheetName() !== area.sheet) workbook.setActiveSheet(sheet);
       sheet.getRange(area.row, area.column, area.rows, area.columns).activate();
       sheet.scrollToCell(Math.max(0, area.row - 3), Math.max(0, area.column - 2));
       // the engine tells of selections made by hand only
