@@ -13,6 +13,13 @@ const KIND = '<metadataType name="XLDAPR" minSupportedVersion="120000" copy="1" 
 const FUTURE = '<futureMetadata name="XLDAPR" count="1"><bk><extLst><ext uri="{bdbb8cdc-fa1e-496e-a857-3c3f30c029c3}"><xda:dynamicArrayProperties xmlns:xda="http://schemas.microsoft.com/office/spreadsheetml/2017/dynamicarray" fDynamic="1" fCollapsed="0"/></ext></extLst></bk></futureMetadata>';
 const MAIN = "http://schemas.openxmlformats.org/spreadsheetml/2006/main";
 
+/** Puts a piece behind the last of the first kind of part that is there: the parts have a fixed order. */
+function insertAfter(xml: string, ends: readonly string[], piece: string): string {
+  const end = ends.find((one) => xml.includes(one)) ?? ">";
+  const at = xml.lastIndexOf(end) + end.length;
+  return xml.slice(0, at) + piece + xml.slice(at);
+}
+
 /** The `cm` index of a dynamic array in this workbook; what it needs is added, foreign metadata kept. */
 export function dynamicArrayIndex(pack: Package): number {
   const { part, links } = workbookPart(pack);
@@ -29,8 +36,7 @@ export function dynamicArrayIndex(pack: Package): number {
   if (kind === 0) {
     kind = kinds.length + 1;
     xml = xml.includes("<metadataTypes") ? xml.replace(/<metadataTypes[^>]*>/, `<metadataTypes count="${kind}">`).replace("</metadataTypes>", `${KIND}</metadataTypes>`) : xml.replace(/(<metadata\s[^>]*>)/, `$1<metadataTypes count="1">${KIND}</metadataTypes>`);
-    // future metadata stands between the types (or strings, or queries) and the cell metadata
-    xml = xml.replace(/<cellMetadata|<valueMetadata|<extLst|<\/metadata>/, (next) => `${FUTURE}${next}`);
+    xml = insertAfter(xml, ["</futureMetadata>", "</mdxMetadata>", "</metadataStrings>", "</metadataTypes>"], FUTURE);
   }
   const blocks = [...(/<cellMetadata[^>]*>([\s\S]*?)<\/cellMetadata>/.exec(xml)?.[1] ?? "").matchAll(/<bk>([\s\S]*?)<\/bk>/g)].map((match) => match[1]!);
   const found = blocks.findIndex((block) => new RegExp(`<rc\\s[^>]*t="${kind}"`).test(block) && (block.match(/<rc/g) ?? []).length === 1);
@@ -41,7 +47,7 @@ export function dynamicArrayIndex(pack: Package): number {
   const own = `<bk><rc t="${kind}" v="0"/></bk>`;
   xml = xml.includes("</cellMetadata>")
     ? xml.replace(/<cellMetadata[^>]*>/, `<cellMetadata count="${blocks.length + 1}">`).replace("</cellMetadata>", `${own}</cellMetadata>`)
-    : xml.replace(/<valueMetadata|<extLst|<\/metadata>/, (next) => `<cellMetadata count="1">${own}</cellMetadata>${next}`);
+    : insertAfter(xml, ["</futureMetadata>"], `<cellMetadata count="1">${own}</cellMetadata>`);
   pack.put(existing, xml);
   return blocks.length + 1;
 }
