@@ -239,9 +239,8 @@ class Range extends ClientObject {
   readonly conditionalFormats: Formats;
   constructor(context: Context, private readonly state: () => SheetState | undefined, private readonly area: () => Rectangle | undefined) {
     super(context);
-    const parent = this;
     this.worksheet = strict(new (class extends ClientObject {
-      protected fetch(): unknown { return parent.state()!.name; }
+      protected fetch(): unknown { return state()!.name; }
       get name(): string { return this.read("name"); }
     })(context));
     this.conditionalFormats = strict(new Formats(context, state, area));
