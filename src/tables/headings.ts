@@ -147,6 +147,12 @@ function narrowed(several: readonly Role[], unit: UnitRead | undefined): readonl
   return fitting.length > 0 ? fitting : several;
 }
 
+/**
+ * Headings that only a sheet of field tests has: water content and dry density stand there too, but no compaction curve runs through them.
+ * Common practice, no published source.
+ */
+export const FIELD_ONLY = /(?:\b(?:relative compaction|degree of compaction|density ratio|compaction ?%|chainage|station|stn|from (?:optimum|omc)|retest|lift)|% ?comp(?:action)?|% ?proctor)(?!\w)/i;
+
 /** Labels of a specific gravity that stands in one cell of a sheet. */
 export const SPECIFIC_GRAVITY = /^(?:specific gravity|gs|sg|s\s?g|sp gr|particle density|g_?s|ρs)\b/i;
 /** A row at the foot that sums the readings up is no point. */

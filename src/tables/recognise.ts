@@ -4,7 +4,7 @@ import type { Area, Snapshot } from "../workbook/port";
 import { settle, type Readings } from "./arithmetic";
 import { findGivenOnce, findSpecificGravity, findUnitInTitles } from "./given-once";
 import { blankAt, gridOf, isPercentFormat, numberAt, type Grid } from "./grid";
-import { KIND } from "./headings";
+import { KIND, FIELD_ONLY } from "./headings";
 import { bodyPositions, layoutOf, type Layout } from "./layout";
 import { settleMouldUnits, type MouldUnits } from "./mould-units";
 import { groupPoints, neededRoles, readPoints, type Reading } from "./points";
@@ -32,6 +32,9 @@ export function recogniseTable(snapshot: Snapshot, corrections: Corrections = {}
   const everything = layout.headingAt < 0 || layout.score === 0 ? series.map(({ index }) => index) : wanted;
   const first = bodyPositions(grid, layout.bodyFrom, everything.length > 0 ? everything : series.map(({ index }) => index));
   settleRoles(grid, layout, first, series, notes);
+  const ofField = series.find(({ heading }) => FIELD_ONLY.test(heading));
+  if (ofField && Object.keys(corrections.roles ?? {}).length === 0)
+    problems.push({ cell: null, says: `"${ofField.heading}" says that these are field tests, through which no compaction curve runs. Select a laboratory test; or, if this is one, choose the meaning of its ${orientation === "down" ? "columns" : "rows"}.` });
 
   const named = series.filter(({ role }) => READ_ROLES.has(role)).map(({ index }) => index);
   const positions = named.length > 0 ? bodyPositions(grid, layout.bodyFrom, named) : first;

@@ -173,3 +173,10 @@ test("the user's word overrides everything that was recognised", () => {
   expect(table.series[1]).toMatchObject({ role: "wetDensity", roleKnown: "chosen", unitKnown: "chosen" });
   expect(pairs(table)[2]![1]).toBeCloseTo(2.006, 3);
 });
+
+describe("field tests are not a laboratory test", () => {
+  const field = rows(["Test", "F1", "F2", "F3", "F4"], ["Water content (%)", ...W], ["Dry density (Mg/m3)", ...D], ["Relative compaction", 96, 98, 97, 95]);
+  test("a column that only field sheets have stops the fit, and says what to do", () => expect(recogniseTable(sheet(field)).problems).toEqual([{ cell: null, says: expect.stringMatching(/"Relative compaction" says that these are field tests/) }]));
+  test.each(["Chainage", "Station", "% comp", "From optimum", "Lift no"])("%s tells it too", (heading) => expect(recogniseTable(sheet(rows([heading, 1, 2, 3, 4], ["w (%)", ...W], ["Dry density", ...D]))).problems).toHaveLength(1));
+  test("the user's word overrides it", () => expect(recogniseTable(sheet(field), { roles: { 2: "dryDensity" } }).problems).toEqual([]));
+});

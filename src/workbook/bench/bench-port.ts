@@ -163,7 +163,8 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
       const { workbook } = open();
       if (workbook.getActiveSheet().getSheetName() !== area.sheet) workbook.setActiveSheet(sheet);
       sheet.getRange(area.row, area.column, area.rows, area.columns).activate();
-      sheet.scrollToCell(Math.max(0, area.row - 3), Math.max(0, area.column - 2));
+      const seen = sheet.getVisibleRange();
+      if (!seen || area.row < seen.startRow || area.row > seen.endRow - 1 || area.column < seen.startColumn || area.column > seen.endColumn - 1) sheet.scrollToCell(Math.max(0, area.row - 3), Math.max(0, area.column - 2));
       // the engine tells of selections made by hand only
       port.tell("selection", area);
       return done(undefined);

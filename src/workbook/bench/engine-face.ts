@@ -36,6 +36,8 @@ export interface FaceWorksheet {
   addConditionalFormattingRule(rule: FaceRule): unknown;
   deleteConditionalFormattingRule(id: string): unknown;
   scrollToCell(row: number, column: number): unknown;
+  /** what the window shows of the sheet */
+  getVisibleRange(): EngineRange | null;
   getSheet(): {
     getCellRaw(row: number, column: number): unknown;
     getCellMatrix(): { forValue(each: (row: number, column: number, cell: unknown) => void): void };
