@@ -1,28 +1,15 @@
-import ExcelJS from "exceljs";
 import { chromium, type Browser, type Page } from "playwright-core";
 import { pack, unpack } from "../../src/workbook/frame/cells";
 import { methods } from "../../src/workbook/frame/messages";
 import type { Area, PortEvent, WorkbookPort } from "../../src/workbook/port";
-import { portContract, USER_NOTE, type ContractHost } from "../workbook/contract";
+import { portContract, type ContractHost } from "../workbook/contract";
+import { contractWorkbook } from "../workbook/contract-workbook";
 
 jest.setTimeout(60_000);
 let browser: Browser, page: Page, file: string;
 
 beforeAll(async () => {
-  const book = new ExcelJS.Workbook(), plain = book.addWorksheet("Plain");
-  plain.addRows([["w %", "dry"], [12, 1.8], [14]]);
-  plain.getCell("B3").value = { formula: "B2*1.05", result: 0 };
-  plain.getCell("A4").value = { formula: "1/0", result: { error: "#DIV/0!" } as unknown as number };
-  plain.getCell("D1").value = "merged";
-  plain.mergeCells("D1:E2");
-  plain.getCell("B2").note = USER_NOTE;
-  plain.addConditionalFormatting({ ref: "A1:A10", rules: [{ type: "expression", priority: 1, formulae: ["A1>13"], style: { font: { bold: true } } }] });
-  book.addWorksheet("Second sheet");
-  const locked = book.addWorksheet("Locked");
-  locked.getCell("A1").value = "locked";
-  await locked.protect("", {});
-  file = Buffer.from(await book.xlsx.writeBuffer()).toString("base64");
-
+  file = (await contractWorkbook()).toString("base64");
   browser = await chromium.connect(process.env.BROWSER_ENDPOINT!);
   page = await browser.newPage({ viewport: { width: 1280, height: 800 } });
   await page.goto(`${process.env.BENCH_URL}bench/`);

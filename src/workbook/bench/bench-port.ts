@@ -2,8 +2,9 @@ import { cellOf, CellReader } from "../../engine/cells";
 import { messageKey } from "../../engine/messages";
 import type { PageEngine } from "../../engine/page";
 import { CellError, type Cell } from "../../worksheet/cell";
-import { areaName, overlap } from "../address";
-import { markFormula, markKindOf, SIGNATURE, type Area, type Content, type Done, type Mark, type MarkKind, type PortEvent, type Snapshot, type Why, type WorkbookPort } from "../port";
+import { areaName } from "../address";
+import { againstWriting, cellsOf, noSheet, refused, spills, targetsOf } from "../consent";
+import { markFormula, markKindOf, SIGNATURE, type Area, type Content, type Done, type Mark, type MarkKind, type PortEvent, type Snapshot, type WorkbookPort } from "../port";
 import type { EngineRange, FaceRule, FaceWorksheet, OpenWorkbook } from "./engine-face";
 
 const PATIENCE_MS = 30_000;
@@ -15,7 +16,6 @@ const LOOKS: Readonly<Record<MarkKind, { readonly fill: string; readonly ink: st
   ask: { fill: "#dcebfa", ink: "#123f66" },
 };
 
-const refused = (why: Why, where: readonly Area[], says: string): { ok: false; why: Why; where: readonly Area[]; says: string } => ({ ok: false, why, where, says });
 const done = <T>(value: T): Done<T> => ({ ok: true, value });
 
 export const kindOfRule = ({ rule }: FaceRule): MarkKind | undefined => typeof rule.value === "string" ? markKindOf(rule.value) : undefined;
@@ -36,7 +36,6 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
     await engine.api.getFormula().onCalculationResultApplied(PATIENCE_MS);
   };
 
-  const gone = (area: Area): Done<never> => refused("gone", [area], `There is no sheet "${area.sheet}".`);
   const beyond = (sheet: FaceWorksheet, area: Area): boolean => area.row + area.rows > sheet.getMaxRows() || area.column + area.columns > sheet.getMaxColumns();
 
   function valueAt(sheet: FaceWorksheet, cells: CellReader, row: number, column: number): { raw: { f?: string | null } | null; value: Cell; message: string | undefined } {
@@ -74,7 +73,7 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
 
     read: async (area) => {
       const sheet = sheetOf(area.sheet);
-      if (!sheet) return gone(area);
+      if (!sheet) return noSheet(area);
       // a whole column means its part inside the declared sheet
       const rows = Math.min(area.rows, sheet.getMaxRows() - area.row), columns = Math.min(area.columns, sheet.getMaxColumns() - area.column);
       if (rows * columns > MOST_CELLS) return refused("too-large", [area], `${areaName(area)} has more than ${MOST_CELLS.toLocaleString("en")} cells: select fewer.`);
@@ -91,48 +90,39 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
     },
 
     write: async (what, over) => {
-      const commands: { sheet: FaceWorksheet; matrix: Record<number, Record<number, object>> }[] = [];
-      const written: Area[] = [], filled: Area[] = [];
-      for (const placement of what) {
-        const sheet = sheetOf(placement.sheet);
-        const whole: Area = { sheet: placement.sheet, row: placement.row, column: placement.column, rows: placement.cells.length, columns: Math.max(0, ...placement.cells.map((row) => row.length)) };
-        if (!sheet) return gone(whole);
-        if (open().protectedSheets.has(placement.sheet)) return refused("protected", [whole], `The sheet "${placement.sheet}" is protected: unprotect it first, or choose another.`);
-        const matrix: Record<number, Record<number, object>> = {}, cells = reader();
-        for (const [r, row] of placement.cells.entries()) for (const [c, content] of row.entries()) {
-          if (content === null) continue;
-          const at: Area = { sheet: placement.sheet, row: placement.row + r, column: placement.column + c, rows: 1, columns: 1 };
-          const reach: Area = "formula" in content && content.reaches ? { ...at, ...content.reaches } : at;
-          if (beyond(sheet, reach)) return refused("too-large", [reach], `${areaName(reach)} lies beyond the sheet.`);
-          const merge = sheet.getMergedRanges().map((range) => areaOf(placement.sheet, range.getRange())).find((one) => overlap(one, reach));
-          if (merge) return refused("merged", [merge], `${areaName(merge)} is merged: choose cells that are not.`);
-          const spills = reach.rows * reach.columns > 1;
-          const table = open().tables.find((one) => overlap(one, reach));
-          if (table && spills) return refused("table", [table], `${areaName(table)} is a table, which takes no spilling formulas: choose a place outside it.`);
-          for (let row2 = reach.row; row2 < reach.row + reach.rows; row2++) for (let column2 = reach.column; column2 < reach.column + reach.columns; column2++) {
-            const cell: Area = { sheet: placement.sheet, row: row2, column: column2, rows: 1, columns: 1 };
-            const { raw, value } = valueAt(sheet, cells, row2, column2);
-            const empty = !raw?.f && (value === null || value === "");
-            if (!empty && !over.some((one) => overlap(one, cell))) filled.push(cell);
-            // a spill goes only into empty cells: what the user agreed to lose is cleared in the same step
-            if (!empty && spills && (row2 !== at.row || column2 !== at.column)) (matrix[row2] ??= {})[column2] = CLEAR;
-          }
-          (matrix[at.row] ??= {})[at.column] = contentOf(content);
-          written.push(reach);
-        }
-        commands.push({ sheet, matrix });
+      const targets = targetsOf(what), cells = reader();
+      const filled = (at: Area): boolean => {
+        const { raw, value } = valueAt(sheetOf(at.sheet)!, cells, at.row, at.column);
+        return Boolean(raw?.f) || (value !== null && value !== "");
+      };
+      const against = againstWriting(targets, over, {
+        has: (sheet) => sheetOf(sheet) !== null,
+        isProtected: (sheet) => open().protectedSheets.has(sheet),
+        size: (sheet) => ({ rows: sheetOf(sheet)!.getMaxRows(), columns: sheetOf(sheet)!.getMaxColumns() }),
+        merges: (sheet) => sheetOf(sheet)!.getMergedRanges().map((range) => areaOf(sheet, range.getRange())),
+        tables: (sheet) => open().tables.filter((table) => table.sheet === sheet),
+        isFilled: filled,
+      });
+      if (against) return against;
+
+      const matrices = new Map<string, Record<number, Record<number, object>>>();
+      for (const target of targets) {
+        const matrix = matrices.get(target.at.sheet) ?? {};
+        matrices.set(target.at.sheet, matrix);
+        // a spill goes only into empty cells: what the user agreed to lose is cleared in the same step
+        if (spills(target)) for (const cell of cellsOf(target.reach)) if (filled(cell)) (matrix[cell.row] ??= {})[cell.column] = CLEAR;
+        (matrix[target.at.row] ??= {})[target.at.column] = contentOf(target.content);
       }
-      if (filled.length > 0) return refused("filled", filled, `${filled.length} cell${filled.length === 1 ? " is" : "s are"} filled: ${filled.slice(0, 6).map(areaName).join(", ")}${filled.length > 6 ? " …" : ""}.`);
-      for (const { sheet, matrix } of commands) {
-        await engine.api.executeCommand("sheet.command.set-range-values", { unitId: open().workbook.getId(), subUnitId: sheet.getSheetId(), value: matrix });
+      for (const [sheet, value] of matrices) {
+        await engine.api.executeCommand("sheet.command.set-range-values", { unitId: open().workbook.getId(), subUnitId: sheetOf(sheet)!.getSheetId(), value });
       }
       await settled();
-      return done({ written });
+      return done({ written: targets.map(({ reach }) => reach) });
     },
 
     mark: async (marks) => {
       const notesLeftOut: Area[] = [];
-      for (const { area } of marks) if (!sheetOf(area.sheet)) return gone(area);
+      for (const { area } of marks) if (!sheetOf(area.sheet)) return noSheet(area);
       for (const mark of marks) {
         const sheet = sheetOf(mark.area.sheet)!;
         if (!isMarked(sheet, mark)) addMark(sheet, mark);
@@ -158,7 +148,7 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
 
     goTo: async (area) => {
       const sheet = sheetOf(area.sheet);
-      if (!sheet) return gone(area);
+      if (!sheet) return noSheet(area);
       if (beyond(sheet, area)) return refused("gone", [area], `${areaName(area)} lies beyond the sheet.`);
       const { workbook } = open();
       if (workbook.getActiveSheet().getSheetName() !== area.sheet) workbook.setActiveSheet(sheet);

@@ -1,7 +1,8 @@
 import { CellError, type Cell, type ErrorCode } from "../../worksheet/cell";
 import { areaName, cellName, overlap } from "../address";
-import { markFormula, markKindOf, SIGNATURE, type Area, type Done, type Mark, type MarkKind, type Placement, type PortEvent, type SheetInfo, type Snapshot, type WorkbookPort } from "../port";
-import { refusalOf, refused } from "./refusals";
+import { markFormula, markKindOf, SIGNATURE, type Area, type Content, type Done, type Mark, type MarkKind, type Placement, type PortEvent, type SheetInfo, type Snapshot, type WorkbookPort } from "../port";
+import { againstWriting, noSheet, refused, spills, targetsOf } from "../consent";
+import { refusalOf } from "./refusals";
 
 const MOST_CELLS = 200_000;
 const SETTING = "Tampsheet.";
@@ -14,7 +15,6 @@ const LOOKS: Readonly<Record<MarkKind, { readonly fill: string; readonly ink: st
 
 const done = <T>(value: T): Done<T> => ({ ok: true, value });
 const supports = (version: string): boolean => Office.context.requirements.isSetSupported("ExcelApi", version);
-const gone = (area: Area): Done<never> => refused("gone", [area], `There is no sheet "${area.sheet}".`);
 
 /** The workbook port on the office host's own interface. Every method is one batch, with as few round trips as its answers need. */
 export function officePort(): WorkbookPort {
@@ -97,7 +97,7 @@ async function readArea(context: Excel.RequestContext, area: Area): Promise<Done
   const used = sheet.getUsedRangeOrNullObject(true);
   used.load("rowIndex,columnIndex,rowCount,columnCount");
   await context.sync();
-  if (sheet.isNullObject) return gone(area);
+  if (sheet.isNullObject) return noSheet(area);
   // a whole column means its used part; the rest is blank and is not fetched
   const bottom = used.isNullObject ? 0 : used.rowIndex + used.rowCount, right = used.isNullObject ? 0 : used.columnIndex + used.columnCount;
   const rows = Math.max(1, Math.min(area.rows, bottom - area.row)), columns = Math.max(1, Math.min(area.columns, right - area.column));
@@ -123,35 +123,26 @@ function cellOf(value: unknown, type: string): Cell {
 
 const placeOf = ({ sheet, row, column, cells }: Placement): Area => ({ sheet, row, column, rows: cells.length, columns: Math.max(0, ...cells.map((row) => row.length)) });
 
-/** One cell to be written, with everything that it will fill. */
-interface Target { readonly sheet: string; readonly row: number; readonly column: number; readonly content: string | number | boolean; readonly reach: Area }
-
-function targetsOf(what: readonly Placement[]): Target[] {
-  return what.flatMap(({ sheet, row, column, cells }) => cells.flatMap((line, r) => line.flatMap((content, c): Target[] => {
-    if (content === null) return [];
-    const at: Area = { sheet, row: row + r, column: column + c, rows: 1, columns: 1 };
-    const reach = "formula" in content && content.reaches ? { ...at, ...content.reaches } : at;
-    const value = "formula" in content ? (content.formula.startsWith("=") ? content.formula : `=${content.formula}`)
-      : content.value instanceof CellError ? content.value.code
-        // a text that begins like a formula is kept a text
-        : typeof content.value === "string" && /^[=+\-@]/.test(content.value) ? `'${content.value}` : content.value ?? "";
-    return [{ sheet, row: at.row, column: at.column, content: value, reach }];
-  })));
+/** A content as the host's `formulas` take it. */
+function hostContent(content: Content): string | number | boolean {
+  if ("formula" in content) return content.formula.startsWith("=") ? content.formula : `=${content.formula}`;
+  if (content.value instanceof CellError) return content.value.code;
+  // a text that begins like a formula is kept a text
+  return typeof content.value === "string" && /^[=+\-@]/.test(content.value) ? `'${content.value}` : content.value ?? "";
 }
 
 async function writeAll(context: Excel.RequestContext, what: readonly Placement[], over: readonly Area[]): Promise<Done<{ written: readonly Area[] }>> {
   const targets = targetsOf(what);
-  const names = [...new Set(targets.map(({ sheet }) => sheet))];
-  const sheets = new Map(names.map((name) => {
+  const sheets = new Map([...new Set(targets.map(({ at }) => at.sheet))].map((name) => {
     const sheet = context.workbook.worksheets.getItemOrNullObject(name);
     sheet.load("name");
     return [name, sheet] as const;
   }));
   await context.sync();
-  for (const [name, sheet] of sheets) if (sheet.isNullObject) return gone({ sheet: name, row: 0, column: 0, rows: 1, columns: 1 });
+  for (const { reach } of targets) if (sheets.get(reach.sheet)!.isNullObject) return noSheet(reach);
 
   const looked = targets.map((target) => {
-    const { row, column, rows, columns } = target.reach, sheet = sheets.get(target.sheet)!;
+    const { row, column, rows, columns } = target.reach, sheet = sheets.get(target.at.sheet)!;
     const range = sheet.getRangeByIndexes(row, column, rows, columns);
     range.load("formulas");
     sheet.protection.load("protected");
@@ -162,22 +153,25 @@ async function writeAll(context: Excel.RequestContext, what: readonly Placement[
   });
   await context.sync();
 
-  const filled: Area[] = [];
-  for (const { target: { reach }, range, tables, merged, sheet } of looked) {
-    if (sheet.protection.protected) return refused("protected", [reach], `The sheet "${reach.sheet}" is protected: unprotect it first, or choose another.`);
-    if (merged && !merged.isNullObject) return refused("merged", [reach], `${areaName(reach)} holds merged cells: choose cells that are not.`);
-    if (tables.value > 0 && reach.rows * reach.columns > 1) return refused("table", [reach], `${areaName(reach)} lies in a table, which takes no spilling formulas: choose a place outside it.`);
-    (range.formulas as unknown[][]).forEach((line, r) => line.forEach((formula, c) => {
-      const cell: Area = { sheet: reach.sheet, row: reach.row + r, column: reach.column + c, rows: 1, columns: 1 };
-      if (formula !== "" && !over.some((one) => overlap(one, cell))) filled.push(cell);
-    }));
-  }
-  if (filled.length > 0) return refused("filled", filled, `${filled.length} cell${filled.length === 1 ? " is" : "s are"} filled: ${filled.slice(0, 6).map(areaName).join(", ")}${filled.length > 6 ? " …" : ""}.`);
+  // what each target's own range answered stands for the sheet: one round trip for all of them
+  const answered = (cell: Area) => looked.find(({ target }) => overlap(target.reach, cell))!;
+  const against = againstWriting(targets, over, {
+    has: () => true,
+    isProtected: (sheet) => sheets.get(sheet)!.protection.protected,
+    size: () => ({ rows: 1_048_576, columns: 16_384 }),
+    merges: (sheet) => looked.filter(({ target, merged }) => target.at.sheet === sheet && merged && !merged.isNullObject).map(({ target }) => target.reach),
+    tables: (sheet) => looked.filter(({ target, tables }) => target.at.sheet === sheet && tables.value > 0).map(({ target }) => target.reach),
+    isFilled: (cell) => {
+      const { target: { reach }, range } = answered(cell);
+      return (range.formulas as unknown[][])[cell.row - reach.row]![cell.column - reach.column] !== "";
+    },
+  });
+  if (against) return against;
 
-  for (const { target: { content, reach }, range, sheet } of looked) {
+  for (const { target, range, sheet } of looked) {
     // a spill goes only into empty cells; what the user agreed to lose is cleared, its formats kept
-    if (reach.rows * reach.columns > 1) range.clear("Contents");
-    sheet.getRangeByIndexes(reach.row, reach.column, 1, 1).formulas = [[content]];
+    if (spills(target)) range.clear("Contents");
+    sheet.getRangeByIndexes(target.at.row, target.at.column, 1, 1).formulas = [[hostContent(target.content)]];
   }
   await context.sync();
   return done({ written: targets.map(({ reach }) => reach) });
@@ -192,7 +186,7 @@ async function markAll(context: Excel.RequestContext, marks: readonly Mark[]): P
     sheets.set(area.sheet, sheet);
   }
   await context.sync();
-  for (const { area } of marks) if (sheets.get(area.sheet)!.isNullObject) return gone(area);
+  for (const { area } of marks) if (sheets.get(area.sheet)!.isNullObject) return noSheet(area);
 
   const withNotes = supports("1.18");
   const rangeOf = ({ sheet, row, column, rows, columns }: Area): Excel.Range => sheets.get(sheet)!.getRangeByIndexes(row, column, rows, columns);
@@ -242,7 +236,7 @@ async function unmarkSheets(context: Excel.RequestContext, only: string | null):
   sheets.load("items/name");
   await context.sync();
   const wanted = sheets.items.filter(({ name }) => only === null || name === only);
-  if (only !== null && wanted.length === 0) return gone({ sheet: only, row: 0, column: 0, rows: 1, columns: 1 });
+  if (only !== null && wanted.length === 0) return noSheet({ sheet: only, row: 0, column: 0, rows: 1, columns: 1 });
   const withNotes = supports("1.18");
   const found = wanted.map((sheet) => {
     const formats = sheet.getRange().conditionalFormats;
@@ -265,7 +259,7 @@ async function goTo(context: Excel.RequestContext, area: Area): Promise<Done> {
   const sheet = context.workbook.worksheets.getItemOrNullObject(area.sheet);
   sheet.load("name");
   await context.sync();
-  if (sheet.isNullObject) return gone(area);
+  if (sheet.isNullObject) return noSheet(area);
   sheet.activate();
   sheet.getRangeByIndexes(area.row, area.column, area.rows, area.columns).select();
   await context.sync();

@@ -1,6 +1,5 @@
+import { refused } from "../consent";
 import type { Area, Done, Why } from "../port";
-
-export const refused = (why: Why, where: readonly Area[], says: string): Done<never> => ({ ok: false, why, where, says });
 
 /** What the host's own error codes mean for a request; a code that is not here is the host failing, and is thrown on. */
 const MEANING: Readonly<Record<string, readonly [Why, string]>> = {
