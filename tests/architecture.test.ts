@@ -36,7 +36,7 @@ const ROOMS: Readonly<Record<string, readonly string[]>> = {
   "src/worksheet": ["src/relations", "src/units", "src/phase", "src/findings", "src/compaction", "src/field", "src/earthwork"],
   "src/tables": ["src/relations", "src/units", "src/phase", "src/compaction", "src/worksheet"],
   "src/workbook/office": ["src/worksheet"],
-  "src/workbook/file": [],
+  "src/workbook/file": ["src/worksheet"],
   "src/workbook/frame": ["src/worksheet"],
   "src/workbook/bench": ["src/worksheet", "src/engine"],
   "src/workbook/headless": ["src/worksheet", "src/engine", "src/workbook/file"],

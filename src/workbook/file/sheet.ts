@@ -26,6 +26,7 @@ export function readSheet(pack: Package, { name, part, hidden, strings, count }:
   const masters = new Map<string, { row: number; column: number; text: string }>();
   const arrays: { row: number; column: number; range: Rectangle }[] = [];
   const frozen = { rows: 0, columns: 0 };
+  let phonetic = 0;
   let isProtected = false, rows = 0, columns = 0, row = -1, column = -1, collecting: "v" | "f" | "t" | "rule" | undefined, text = "";
   let cell: { type: string; style: number; dynamic: boolean; value: string | undefined; formula: { text: string; type: string; ref: string; group: string } | undefined } | undefined;
   let markRanges: Rectangle[] = [];
@@ -58,8 +59,9 @@ export function readSheet(pack: Package, { name, part, hidden, strings, count }:
           cell = { type: at.t ?? "n", style: Number(at.s ?? 0), dynamic: at.cm !== undefined, value: undefined, formula: undefined };
           break;
         }
+        case "rPh": phonetic++; break;
         case "v": case "t":
-          if (cell) { collecting = tag; text = ""; }
+          if (cell && phonetic === 0) { collecting = tag; text = ""; }
           break;
         case "f":
           if (cell) { collecting = "f"; text = ""; cell.formula = { text: "", type: at.t ?? "normal", ref: at.ref ?? "", group: at.si ?? "" }; }
@@ -86,6 +88,8 @@ export function readSheet(pack: Package, { name, part, hidden, strings, count }:
     },
     text(more) { if (collecting) text += more; },
     close(tag) {
+      if (tag === "rPh") phonetic--;
+      if (phonetic > 0) return;
       if (tag === "f" && cell?.formula) cell.formula.text = text;
       else if (tag === "v" && cell) cell.value = text;
       else if (tag === "t" && cell) cell.value = (cell.value ?? "") + text;
@@ -142,12 +146,26 @@ export function readSheet(pack: Package, { name, part, hidden, strings, count }:
     }
   }
 
-  // what an array has filled is its cache, not a reading; it keeps its format
-  const inArray = (one: BookCell): boolean => arrays.some(({ row: r, column: c, range }) => !(one.row === r && one.column === c) && one.formula === undefined
-    && one.row >= range.row && one.row < range.row + range.rows && one.column >= range.column && one.column < range.column + range.columns);
-  const kept = arrays.length === 0 ? cells : cells.flatMap((one): BookCell[] => !inArray(one) ? [one] : one.style !== 0 ? [{ row: one.row, column: one.column, value: null, style: one.style }] : []);
+  const caches = filledBy(arrays);
+  const kept = arrays.length === 0 ? cells : cells.flatMap((one): BookCell[] =>
+    one.formula !== undefined || !caches(one.row, one.column) ? [one] : one.style !== 0 ? [{ row: one.row, column: one.column, value: null, style: one.style }] : []);
 
   return { name, part, hidden, protected: isProtected, cells: kept, rows, columns, merges, hiddenRows, hiddenColumns, widths, heights, frozen, notes: readNotes(pack, part), marks };
+}
+
+/** Arrays up to this many cells are looked up cell by cell, larger ones by their bounds. */
+const SMALL_ARRAY = 10_000;
+
+/** Tells what arrays have filled: that is their cache, not a reading. */
+function filledBy(arrays: readonly { range: Rectangle }[]): (row: number, column: number) => boolean {
+  const small = new Set<number>(), large: Rectangle[] = [];
+  for (const { range } of arrays) {
+    const size = range.rows * range.columns;
+    if (size === 1) continue;
+    if (size > SMALL_ARRAY) large.push(range);
+    else for (let r = range.row; r < range.row + range.rows; r++) for (let c = range.column; c < range.column + range.columns; c++) small.add(r * MOST_COLUMNS + c);
+  }
+  return (row, column) => small.has(row * MOST_COLUMNS + column) || large.some((range) => row >= range.row && row < range.row + range.rows && column >= range.column && column < range.column + range.columns);
 }
 
 /** Notes of a sheet (legacy comments), ours told by how they begin. */
@@ -155,14 +173,16 @@ function readNotes(pack: Package, sheetPart: string): BookNote[] {
   const notes: BookNote[] = [];
   for (const { type, target } of linksOf(pack, sheetPart)) {
     if (type !== "comments" || !pack.has(target)) continue;
-    let at: Rectangle | undefined, text = "", inText = false;
+    let at: Rectangle | undefined, text = "", inText = false, phonetic = 0;
     readXml(target, pack.text(target), pack.depth, {
       open(tag, { ref = "" }) {
         if (tag === "comment") { at = parseRange(ref); text = ""; }
-        if (tag === "t") inText = true;
+        if (tag === "rPh") phonetic++;
+        if (tag === "t") inText = phonetic === 0;
       },
       close(tag) {
         if (tag === "t") inText = false;
+        if (tag === "rPh") phonetic--;
         if (tag === "comment" && at) notes.push({ row: at.row, column: at.column, text: decodeText(text), ours: text.startsWith(SIGNATURE) });
       },
       text(more) { if (inText) text += more; },

@@ -3,6 +3,7 @@ import { CellError, type Cell } from "../../worksheet/cell";
 import { areaName } from "../address";
 import { againstWriting, cellsOf, noSheet, refused, spills, targetsOf } from "../consent";
 import type { Book, BookCell, BookMark, BookPatch, BookSheet, CellPatch } from "../file/book";
+import { changeOf, fillsOf, plainOf } from "../file/changes";
 import { MOST_COLUMNS, MOST_ROWS } from "../file/limits";
 import { patchBook } from "../file/patch";
 import { readBook } from "../file/read";
@@ -31,10 +32,6 @@ interface Sheet {
 
 const key = (row: number, column: number): string => `${row}/${column}`;
 const done = <T>(value: T): Done<T> => ({ ok: true, value });
-const plain = (cell: Cell): { value: string | number | boolean | null; error?: string } => cell instanceof CellError ? { value: null, error: cell.code } : { value: cell };
-/** 12 digits tell a changed result from the last bit of another program's arithmetic. */
-const same = (a: unknown, b: unknown): boolean => typeof a === "number" && typeof b === "number" ? Math.abs(a - b) <= 1e-12 * Math.max(Math.abs(a), Math.abs(b)) : (a ?? "") === (b ?? "");
-
 /** @throws BookRefusal where the file cannot be opened */
 export async function openHeadless(bytes: Uint8Array, engine: HeadlessEngine): Promise<HeadlessWorkbook> {
   const book = readBook(bytes);
@@ -81,24 +78,17 @@ export async function openHeadless(bytes: Uint8Array, engine: HeadlessEngine): P
     const style = sheet.cells.get(key(row, column))?.style ?? 0;
     const now: BookCell = content === null ? { row, column, value: null, style }
       : "formula" in content ? { row, column, value: null, formula: content.formula.replace(/^=/, ""), style }
-        : { row, column, ...plain(content.value), style };
+        : { row, column, ...plainOf(content.value), style };
     sheet.cells.set(key(row, column), now);
   };
 
   function changes(): BookPatch {
     const patches = [...sheets].map(([name, { before, cells, results, filled, marks, notes }]) => {
       const was = new Map(before.cells.map((cell) => [key(cell.row, cell.column), cell])), changed: CellPatch[] = [];
-      for (const [at, cell] of cells) {
-        const old = was.get(at), { row, column, formula } = cell;
-        if (formula === undefined) {
-          if (!(old ? old.formula === undefined && same(old.value, cell.value) && old.error === cell.error : cell.value === null && cell.error === undefined)) changed.push({ row, column, kind: "constant", value: cell.value, ...(cell.error === undefined ? {} : { error: cell.error }) });
-          continue;
-        }
-        const result = plain(results.get(at) ?? null), grid = filled.get(at);
-        const fills = grid && { rows: grid.length, columns: grid[0]!.length, results: grid.map((line) => line.map((one) => one instanceof CellError ? { error: one.code } : one)) };
-        if (old?.formula !== formula) changed.push({ row, column, kind: "formula", formula, ...result, ...(fills ? { fills } : {}) });
-        // a function that the engine does not know must not spoil the result that another program has left
-        else if (result.error !== "#NAME?" && (fills || !same(old.value, result.value) || old.error !== result.error)) changed.push({ row, column, kind: "result", ...result, ...(fills ? { fills } : {}) });
+      for (const [at, { row, column, formula, value, error }] of cells) {
+        const shown = formula === undefined ? { value, ...(error === undefined ? {} : { error }) } : plainOf(results.get(at) ?? null), grid = filled.get(at);
+        const change = changeOf(was.get(at), { row, column, formula, shown, ...(grid ? { fills: fillsOf(grid) } : {}) });
+        if (change) changed.push(change);
       }
       const ours = [...notes.values()].filter((note) => note.ours).map(({ row, column, text }) => ({ row, column, text }));
       return { sheet: name, cells: changed, marks, notes: ours };

@@ -81,3 +81,13 @@ test("prefixed parts, cells without references, stored control signs, theme colo
   expect(book.sheets[0]!.cells.map(({ row, column, value }) => [row, column, value])).toEqual([[0, 0, "a\rb"], [0, 1, 2], [1, 0, 3]]);
   expect(book.styles[1]!.colour).toBe("#808080");
 });
+
+test("the reading of a Japanese text is no part of it", () => {
+  const book = readBook(handmade({ sheet: '<row r="1"><c r="A1" t="inlineStr"><is><t>含水比</t><rPh sb="0" eb="3"><t>ガンスイヒ</t></rPh></is></c><c r="B1"><v>12</v></c></row>' }));
+  expect(book.sheets[0]!.cells.map(({ value }) => value)).toEqual(["含水比", 12]);
+});
+
+test("twenty thousand single-cell arrays among a hundred thousand cells are read in a blink", () => {
+  const rows = Array.from({ length: 20_000 }, (_, r) => `<row r="${r + 1}"><c r="A${r + 1}" cm="1"><f t="array" ref="A${r + 1}">B${r + 1}+1</f><v>1</v></c>${["B", "C", "D", "E"].map((c) => `<c r="${c}${r + 1}"><v>${r}</v></c>`).join("")}</row>`).join("");
+  expect(readBook(handmade({ sheet: rows })).sheets[0]!.cells).toHaveLength(100_000);
+});
