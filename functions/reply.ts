@@ -7,11 +7,12 @@ const HOST_CODE = {
 
 const toHost = (error: CellError): CustomFunctions.Error => new CustomFunctions.Error(CustomFunctions.ErrorCode[HOST_CODE[error.code]], error.says);
 
-/** An error value that the host put in a cell, seen as ours; everything else as it is. */
-const fromHost = (value: unknown): unknown => {
-  if (value instanceof CustomFunctions.Error) return new CellError(codeOf(value.code), value.message ?? "");
-  return value;
-};
+/** An error value that the host put in a cell, seen as ours; everything else as it is. The only objects among a cell's values are errors, whatever class a host gives them. */
+function fromHost(value: unknown): unknown {
+  if (typeof value !== "object" || value === null) return value;
+  const { code, message } = value as { code?: unknown; message?: unknown };
+  return new CellError(codeOf(code), typeof message === "string" ? message : "");
+}
 
 const codeOf = (code: unknown): ErrorCode => {
   for (const [ours, theirs] of Object.entries(HOST_CODE)) if (code === CustomFunctions.ErrorCode[theirs] || code === ours) return ours as ErrorCode;

@@ -29,7 +29,10 @@ export class Desk {
   private readonly hearers = new Set<() => void>();
 
   constructor(private readonly engine: PageEngine) {
-    this.port = benchPort(engine, () => this.opened());
+    this.port = benchPort(engine, () => this.opened(), () => {
+      this.unsaved = true;
+      this.news();
+    });
     this.port.on("selection", () => this.news());
   }
 

@@ -176,6 +176,16 @@ describe("a workbook of the user's own, made by another program", () => {
   });
 });
 
+test("a mark counts as a change that is not saved", async () => {
+  const mark = await page.evaluate(() => {
+    window.bench.desk!.unsaved = false;
+    return window.bench.desk!.port.mark([{ area: { sheet: "Tests", row: 1, column: 1, rows: 1, columns: 1 }, kind: "ask" }]);
+  });
+  expect(mark.ok).toBe(true);
+  expect(await page.locator("#unsaved").isVisible()).toBe(true);
+  await page.evaluate(() => window.bench.desk!.port.unmark(null));
+});
+
 test("the splitter answers to the keyboard, and the pane can be put away", async () => {
   const width = async (): Promise<number> => (await page.locator("#pane").boundingBox())?.width ?? 0;
   const before = await width();

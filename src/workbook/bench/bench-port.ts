@@ -27,8 +27,8 @@ export interface BenchPort extends WorkbookPort {
   cell(area: Area): { readonly value: Cell; readonly formula: string | null; readonly shown: string; readonly message: string | undefined };
 }
 
-/** The workbook port on the page's own engine. */
-export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPort {
+/** The workbook port on the page's own engine. `touched` hears of changes that the engine does not count as edits. */
+export function benchPort(engine: PageEngine, open: () => OpenWorkbook, touched: () => void): BenchPort {
   const heard: Record<PortEvent, Set<(area: Area) => void>> = { selection: new Set(), change: new Set() };
   const reader = (): CellReader => new CellReader(engine.library, engine.injector, open().workbook.getId());
   const sheetOf = (name: string): FaceWorksheet | null => open().workbook.getSheetByName(name);
@@ -131,6 +131,7 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
         if (note && !note.note.startsWith(SIGNATURE)) notesLeftOut.push({ ...mark.area, rows: 1, columns: 1 });
         else first.createOrUpdateNote(noteAt(mark.area.row, mark.area.column, mark.note));
       }
+      if (marks.length > 0) touched();
       return done({ notesLeftOut });
     },
 
@@ -143,6 +144,7 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
         removed += before.length - sheet.getConditionalFormattingRules().filter(kindOfRule).length;
         for (const note of [...sheet.getNotes()]) if (note.note.startsWith(SIGNATURE)) sheet.getRange(note.row, note.col).deleteNote();
       }
+      if (removed > 0) touched();
       return done({ removed });
     },
 
@@ -162,7 +164,9 @@ export function benchPort(engine: PageEngine, open: () => OpenWorkbook): BenchPo
 
     recall: async (key) => open().settings.get(key) ?? null,
     remember: async (key, value) => {
+      if ((open().settings.get(key) ?? null) === value) return;
       if (value === null) open().settings.delete(key); else open().settings.set(key, value);
+      touched();
     },
 
     on(event, hear) {
