@@ -45,6 +45,9 @@ function buttons(desk: Desk): void {
   const file = element<HTMLInputElement>("file");
   const take = async (chosen: File): Promise<void> => {
     if (desk.unsaved && !confirm(`${desk.fileName} has changes that are not saved. Open ${chosen.name} all the same?`)) return;
+    notice(`Opening ${chosen.name} …`, "plain");
+    // the page shows that before the work begins
+    await new Promise((resolve) => { setTimeout(resolve, 30); });
     try {
       await desk.open(new Uint8Array(await chosen.arrayBuffer()), chosen.name);
       closeNotice();

@@ -149,6 +149,10 @@ export class CurveController {
     const around = window && await this.read(window);
     if (!around) return null;
     const region = filledRegion(around, cell);
+    if (region && goesOn(region, window, used)) {
+      this.say(this.turn, `The table around ${areaName(cell)} goes on for more than ${REGION} rows or columns. Select the part that is one test.`);
+      return null;
+    }
     return region ? this.read(region) : this.read(cell);
   }
 
@@ -270,6 +274,12 @@ export class CurveController {
 }
 
 export const keyOf = (area: Area): string => `curve:${areaName(area)}`;
+
+/** Whether a region reaches the edge of the window it was looked for in, while the sheet goes on behind it. */
+const goesOn = (region: Area, window: Area, used: Area): boolean =>
+  (region.row === window.row && window.row > used.row) || (region.column === window.column && window.column > used.column)
+  || (region.row + region.rows === window.row + window.rows && window.row + window.rows < used.row + used.rows)
+  || (region.column + region.columns === window.column + window.columns && window.column + window.columns < used.column + used.columns);
 
 const isTest = ({ waterFrom, dryFrom }: Table): boolean => waterFrom !== null && dryFrom !== null;
 

@@ -158,7 +158,7 @@ describe("a workbook of the user's own, made by another program", () => {
     const bad = path.join(folder, name);
     writeFileSync(bad, bytes);
     await page.setInputFiles("#file", bad);
-    await page.locator("#notice", { hasText: name }).waitFor({ timeout: 5_000 });
+    await page.locator("#notice", { hasText: `${name} was not opened` }).waitFor({ timeout: 5_000 });
     expect(await page.locator("#notice-text").textContent()).toMatch(says);
     expect(await page.locator("#file-name").textContent()).toBe(open);
     expect(await value(cell("Tests", 2, 1))).toBe(1.996);

@@ -44,6 +44,12 @@ describe("following the selection", () => {
     const { shown } = await open({ sheet: "Lab", row: 3, column: 1, rows: 4, columns: 2 });
     expect(shown().look!.table.series.map(({ role, roleKnown }) => [role, roleKnown])).toEqual([["waterContent", "heading"], ["dryDensity", "heading"]]);
   });
+  test("a block that goes on and on is not cut to what was looked at: the user is asked for a part", async () => {
+    const long = [["Water content (%)", "Dry density (t/m³)"], ...Array.from({ length: 300 }, (_, i) => [8 + i % 7, 1.8 + i % 5 / 50])] as typeof LAB;
+    const { shown } = await open(cell(100, 1), long);
+    expect(shown().look).toBeNull();
+    expect(shown().instead).toMatch(/goes on for more than \d+ rows or columns\. Select the part that is one test/);
+  });
   test("a lone cell stands for the filled block about it", async () => {
     const { shown } = await open(cell(5, 2));
     expect(shown().look!.table.points).toHaveLength(4);
