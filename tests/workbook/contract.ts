@@ -98,6 +98,9 @@ export function portContract(make: () => Promise<ContractHost>): void {
     expect((await port.write([spill], [area("Plain", 3, 2)])).ok).toBe(true);
     expect(await value(area("Plain", 2, 2))).toBe(12);
     expect(await value(area("Plain", 3, 2))).toBe(14);
+    // only the cell that spills has a formula; what it fills has none of its own
+    const read = await port.read(area("Plain", 1, 2, 3, 1));
+    expect(read.ok && read.value.formulas.map(([formula]) => formula)).toEqual(["=A1:A3", null, null]);
   });
 
   test("merged and protected cells are refused, and said to be so", async () => {

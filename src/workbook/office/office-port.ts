@@ -77,6 +77,9 @@ async function listSheets(context: Excel.RequestContext): Promise<SheetInfo[]> {
   }));
 }
 
+/** What the host says where something other than cells is selected. */
+const NO_CELLS: ReadonlySet<string> = new Set(["InvalidSelection", "ItemNotFound", "InvalidArgument"]);
+
 async function readSelection(context: Excel.RequestContext): Promise<Area | null> {
   // asking for one range fails where several are selected
   const range = supports("1.9") ? context.workbook.getSelectedRanges().areas.getItemAt(0) : context.workbook.getSelectedRange();
@@ -84,9 +87,10 @@ async function readSelection(context: Excel.RequestContext): Promise<Area | null
   range.worksheet.load("name");
   try {
     await context.sync();
-  } catch {
-    // a chart or a shape is selected
-    return null;
+  } catch (error) {
+    // a chart or a shape is selected, which is no failure
+    if (NO_CELLS.has(String((error as { code?: unknown }).code))) return null;
+    throw error;
   }
   return { sheet: range.worksheet.name, row: range.rowIndex, column: range.columnIndex, rows: range.rowCount, columns: range.columnCount };
 }
@@ -103,16 +107,36 @@ async function readArea(context: Excel.RequestContext, area: Area): Promise<Done
   const rows = Math.max(1, Math.min(area.rows, bottom - area.row)), columns = Math.max(1, Math.min(area.columns, right - area.column));
   if (rows * columns > MOST_CELLS) return refused("too-large", [area], `${areaName(area)} has more than ${MOST_CELLS.toLocaleString("en")} cells: select fewer.`);
   const range = sheet.getRangeByIndexes(area.row, area.column, rows, columns);
-  range.load("values,formulas,numberFormat,text,valueTypes");
+  const spillable = supports("1.12");
+  range.load(`values,formulas,numberFormat,text,valueTypes${spillable ? ",hasSpill" : ""}`);
   await context.sync();
   const types = range.valueTypes as string[][];
+  const filled = spillable && range.hasSpill !== false ? await filledByOthers(context, sheet, { ...area, rows, columns }, range.formulas as unknown[][]) : new Set<string>();
   return done({
     area: { ...area, rows, columns },
     values: (range.values as unknown[][]).map((row, r) => row.map((value, c) => cellOf(value, types[r]![c]!))),
-    formulas: (range.formulas as unknown[][]).map((row) => row.map((formula) => typeof formula === "string" && formula.startsWith("=") ? formula : null)),
+    formulas: (range.formulas as unknown[][]).map((row, r) => row.map((formula, c) => isFormula(formula) && !filled.has(`${r}/${c}`) ? formula : null)),
     formats: (range.numberFormat as unknown[][]).map((row) => row.map((format) => String(format || "General"))),
     texts: range.text,
   });
+}
+
+const isFormula = (formula: unknown): formula is string => typeof formula === "string" && formula.startsWith("=");
+
+/** Above this many formulas, asking for each one's spill would cost more than it tells. */
+const MOST_ASKED = 2000;
+
+/** Cells that repeat the formula of the cell which fills them. The host is asked for each; in a great block, equal neighbours are taken so. */
+async function filledByOthers(context: Excel.RequestContext, sheet: Excel.Worksheet, area: Area, formulas: readonly (readonly unknown[])[]): Promise<Set<string>> {
+  const cells = formulas.flatMap((row, r) => row.flatMap((formula, c) => isFormula(formula) ? [{ r, c, formula }] : []));
+  if (cells.length > MOST_ASKED) return new Set(cells.filter(({ r, c, formula }) => formulas[r - 1]?.[c] === formula || formulas[r]![c - 1] === formula).map(({ r, c }) => `${r}/${c}`));
+  const asked = cells.map(({ r, c }) => {
+    const parent = sheet.getRangeByIndexes(area.row + r, area.column + c, 1, 1).getSpillParentOrNullObject();
+    parent.load("rowIndex,columnIndex");
+    return { r, c, parent };
+  });
+  await context.sync();
+  return new Set(asked.filter(({ r, c, parent }) => !parent.isNullObject && (parent.rowIndex !== area.row + r || parent.columnIndex !== area.column + c)).map(({ r, c }) => `${r}/${c}`));
 }
 
 function cellOf(value: unknown, type: string): Cell {

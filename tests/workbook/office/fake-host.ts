@@ -46,12 +46,18 @@ export class FakeHost {
   value(sheet: SheetState, row: number, column: number): Value {
     const own = sheet.cells.get(key(row, column));
     if (own) return typeof own.formula === "string" && own.formula.startsWith("=") ? this.compute(sheet, own.formula, 0, 0) : typeof own.formula === "string" && own.formula.startsWith("'") ? own.formula.slice(1) : own.formula;
+    const filler = this.filler(sheet, row, column);
+    return filler ? this.compute(sheet, filler.formula, row - filler.row, column - filler.column) : "";
+  }
+
+  /** The formula that fills a cell by spilling, where there is one; its own cell is filled by itself. */
+  filler(sheet: SheetState, row: number, column: number): { formula: string; row: number; column: number } | undefined {
     for (const [at, { formula }] of sheet.cells) {
       const range = typeof formula === "string" ? /^=(\w+:\w+)$/.exec(formula) : null, area = range && parseRange(range[1]!);
       const [r, c] = at.split(",").map(Number) as [number, number];
-      if (area && row >= r && row < r + area.rows && column >= c && column < c + area.columns) return this.compute(sheet, formula as string, row - r, column - c);
+      if (area && area.rows * area.columns > 1 && row >= r && row < r + area.rows && column >= c && column < c + area.columns) return { formula: formula as string, row: r, column: c };
     }
-    return "";
+    return undefined;
   }
 
   private compute(sheet: SheetState, formula: string, r: number, c: number): Value {
@@ -260,11 +266,21 @@ class Range extends ClientObject {
       case "columnCount": return columns;
       case "values": return grid(value);
       case "text": return grid((r, c) => String(value(r, c)));
-      case "formulas": return grid((r, c) => sheet.cells.get(key(r, c))?.formula ?? value(r, c));
+      // a spilled cell answers with the formula that fills it, as the host's desktop object model does
+      case "formulas": return grid((r, c) => sheet.cells.get(key(r, c))?.formula ?? host.filler(sheet, r, c)?.formula ?? "");
+      case "hasSpill": return grid((r, c) => Boolean(host.filler(sheet, r, c))).flat().some(Boolean) ? null : false;
       case "numberFormat": return grid((r, c) => sheet.cells.get(key(r, c))?.format ?? "General");
       case "valueTypes": return grid((r, c) => { const one = value(r, c); return one === "" ? "Empty" : typeof one === "string" && one.startsWith("#") ? "Error" : typeof one === "number" ? "Double" : typeof one === "boolean" ? "Boolean" : "String"; });
       default: throw new HostFailure("InvalidArgument", `a range has no ${name}`);
     }
+  }
+  get hasSpill(): boolean | null { return this.read("hasSpill"); }
+  getSpillParentOrNullObject(): Range {
+    const { row, column } = this.area()!;
+    return strict(new Range(this.context, this.state, () => {
+      const filler = this.context.host.filler(this.state()!, row, column);
+      return filler && { row: filler.row, column: filler.column, rows: 1, columns: 1 };
+    }));
   }
   get rowIndex(): number { return this.read("rowIndex"); }
   get columnIndex(): number { return this.read("columnIndex"); }

@@ -63,6 +63,16 @@ describe("what is the office host's own", () => {
     expect(fake.syncs).toBe(3);
   });
 
+  test("a chart is no selection; a host that fails is no chart", async () => {
+    fakeHost();
+    const host = (globalThis as unknown as { Excel: { run: (batch: (context: unknown) => Promise<unknown>) => Promise<unknown> } }).Excel, port = officePort();
+    const failing = (code: string) => { host.run = (batch) => batch({ workbook: { getSelectedRanges: () => ({ areas: { getItemAt: () => ({ load() { /* nothing to load */ }, worksheet: { load() { /* nothing to load */ } } }) } }) }, sync: () => Promise.reject(Object.assign(new Error("x"), { code })) }); };
+    failing("InvalidSelection");
+    expect(await port.selection()).toBeNull();
+    failing("AccessDenied");
+    await expect(port.selection()).rejects.toThrow("x");
+  });
+
   test("the host's own refusals become refusals with words; its failures are thrown", async () => {
     const fake = fakeHost(), port = officePort();
     const host = (globalThis as unknown as { Excel: { run: unknown } }).Excel;
