@@ -60,6 +60,10 @@ function limitAtNoWater(there: number, sharpness: number, shape: number, most: n
 /** Bounds that keep four points from asking for a shape no soil has. Common practice, no published source. */
 const LOW: Vector = [0.5, 0, 0.5, 0.02], HIGH: Vector = [1, 0, 25, 5];
 
+/** Where the search begins: the turn as a multiple of the water content of the highest point, sharpness, dry shape. Tried by measuring on 200 seeded curves. */
+const STARTS = [[1.2, 4, 0.3], [1.3, 6, 0.55], [1.5, 7.5, 0.58], [1.1, 8, 0.25], [1.4, 2, 0.6]] as const;
+const EXACT = 1e-6;
+
 export interface SaturationFit extends LeastSquaresFit { readonly shape: SaturationParameters }
 
 /**
@@ -68,9 +72,9 @@ export interface SaturationFit extends LeastSquaresFit { readonly shape: Saturat
  */
 export function fitSaturation(waters: readonly number[], dries: readonly number[], specificGravity: number, waterDensity: number, weights?: readonly number[]): SaturationFit {
   const wettest = Math.max(...waters), driest = Math.min(...waters);
-  const slopes = new Float64Array(4);
+  const slopes = new Float64Array(4), points = waters.length;
   const model: LeastSquaresModel = {
-    points: waters.length,
+    points,
     parameters: 4,
     evaluate(at, residuals, jacobian) {
       const vector = at as unknown as Vector;
@@ -91,9 +95,11 @@ export function fitSaturation(waters: readonly number[], dries: readonly number[
   const most = Math.min(0.995, Math.max(0.55, ...saturations.filter((s) => s > 0)));
   const low = [LOW[0], driest, LOW[2], LOW[3]], high = [HIGH[0], 2 * wettest, HIGH[2], HIGH[3]];
   let best: LeastSquaresFit | undefined;
-  for (const [turn, sharpness, shape] of [[1.15, 3, 0.3], [1.05, 8, 0.2], [1.4, 1.5, 0.6]] as const) {
+  for (const [turn, sharpness, shape] of STARTS) {
     const fit = fitNonlinear(model, [most, Math.min(turn * waters[highest]!, high[1]!), sharpness, shape], { low, high, tolerance: 1e-10, maxEvaluations: 600 });
     if (!best || fit.sumOfSquares < best.sumOfSquares * (1 - 1e-9)) best = fit;
+    // points that lie on the curve to far more than they were measured: there is no better valley to look for
+    if (best.sumOfSquares < points * (EXACT * dries[highest]!) ** 2) break;
   }
   return { ...best!, shape: asParameters(best!.parameters) };
 }

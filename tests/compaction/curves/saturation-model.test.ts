@@ -31,14 +31,16 @@ test("it never crosses the zero-air-voids line, and is continuous down to no wat
   }), { numRuns: 1000, seed: 12 });
 });
 
-test("its own points give the curve back", () => {
-  let met = 0;
-  fc.assert(fc.property(shape.filter((one) => one.sharpness >= 2 && one.sharpness <= 8 && one.dryShape >= 0.15 && one.dryShape <= 0.65 && one.mostSaturation < 0.98), gravity, (one, gs) => {
+test("the points of two hundred seeded curves give their curves back to one part in a million", () => {
+  let state = 1;
+  const uniform = (low: number, high: number): number => { state = (Math.imul(state, 1664525) + 1013904223) >>> 0; return low + (high - low) * state / 2 ** 32; };
+  const wrong: number[] = [];
+  for (let k = 0; k < 200; k++) {
+    const one = { mostSaturation: uniform(0.82, 0.98), waterThere: uniform(14, 22), sharpness: uniform(2, 8), dryShape: uniform(0.15, 0.65) }, gs = uniform(2.6, 2.8);
     const waters = Array.from({ length: 8 }, (_, i) => one.waterThere * (0.5 + 0.1 * i)), dries = waters.map((w) => saturationCurve(w, one, gs, WATER));
     const fit = fitSaturation(waters, dries, gs, WATER);
     expect(fit.converged).toBe(true);
-    for (const [i, w] of waters.entries()) expect(Math.abs(saturationCurve(w, fit.shape, gs, WATER) / dries[i]! - 1)).toBeLessThan(0.005);
-    met++;
-  }), { numRuns: 150, seed: 13 });
-  expect(met).toBe(150);
+    if (waters.some((w, i) => Math.abs(saturationCurve(w, fit.shape, gs, WATER) / dries[i]! - 1) > 1e-6)) wrong.push(k);
+  }
+  expect(wrong).toEqual([]);
 });
