@@ -67,19 +67,25 @@ function buttons(desk: Desk): void {
   const choose = (): void => { file.value = ""; file.click(); };
   element("open").addEventListener("click", choose);
   file.addEventListener("change", () => { const chosen = file.files?.[0]; if (chosen) void take(chosen); });
-  onDrop((dropped) => void take(dropped));
   element("save").addEventListener("click", save);
   element("undo").addEventListener("click", () => desk.undo());
   element("redo").addEventListener("click", () => desk.redo());
   element("notice-close").addEventListener("click", closeNotice);
   // a click leaves the typing where it was, in the grid; the keyboard reaches the buttons all the same
   for (const button of document.querySelectorAll(".tools button")) button.addEventListener("mousedown", (event) => event.preventDefault());
-  addEventListener("keydown", (event) => {
-    if (!(event.ctrlKey || event.metaKey) || event.altKey) return;
-    const key = event.key.toLowerCase();
-    if (key === "s") { event.preventDefault(); save(); }
-    if (key === "o") { event.preventDefault(); choose(); }
-  }, true);
+  const attend = (target: Window): void => {
+    onDrop(target, (dropped) => void take(dropped));
+    target.addEventListener("keydown", (event) => {
+      if (!(event.ctrlKey || event.metaKey) || event.altKey) return;
+      const key = event.key.toLowerCase();
+      if (key === "s") { event.preventDefault(); save(); }
+      if (key === "o") { event.preventDefault(); choose(); }
+    }, true);
+  };
+  attend(window);
+  // the pane is a page of its own: keys pressed and files dropped there come to no one else
+  const pane = element<HTMLIFrameElement>("pane");
+  pane.addEventListener("load", () => { if (pane.contentWindow && pane.src) attend(pane.contentWindow); });
   addEventListener("beforeunload", (event) => { if (desk.unsaved) event.preventDefault(); });
 }
 

@@ -52,24 +52,21 @@ export function splitter(): void {
   });
 }
 
-/** Files dropped anywhere on the page. */
-export function onDrop(take: (file: File) => void): void {
+/** Files dropped anywhere on a window: the page's own, and the pane's, which else would open them in its frame. */
+export function onDrop(target: Window, take: (file: File) => void): void {
   let depth = 0;
   const carriesFiles = (event: DragEvent): boolean => [...event.dataTransfer?.types ?? []].includes("Files");
-  const show = (on: boolean): void => {
-    element("drop").hidden = !on;
-    document.body.classList.toggle("dropping", on);
-  };
-  addEventListener("dragenter", (event) => {
+  const show = (on: boolean): void => { element("drop").hidden = !on; };
+  target.addEventListener("dragenter", (event) => {
     if (!carriesFiles(event)) return;
     depth++;
     show(true);
   });
-  addEventListener("dragleave", (event) => {
+  target.addEventListener("dragleave", (event) => {
     if (carriesFiles(event) && --depth <= 0) { depth = 0; show(false); }
   });
-  addEventListener("dragover", (event) => { if (carriesFiles(event)) event.preventDefault(); });
-  addEventListener("drop", (event) => {
+  target.addEventListener("dragover", (event) => { if (carriesFiles(event)) event.preventDefault(); });
+  target.addEventListener("drop", (event) => {
     if (!carriesFiles(event)) return;
     event.preventDefault();
     depth = 0;

@@ -164,15 +164,22 @@ describe("a workbook of the user's own, made by another program", () => {
     expect(await value(cell("Tests", 2, 1))).toBe(1.996);
   });
 
-  test("a file dropped on the page opens too", async () => {
-    const data = readFileSync(file).toString("base64");
-    await page.evaluate(async (base64) => {
-      const bytes = Uint8Array.from(atob(base64), (letter) => letter.charCodeAt(0)), transfer = new DataTransfer();
-      transfer.items.add(new File([bytes], "dropped.xlsx"));
+  test.each(["page", "pane"] as const)("a file dropped on the %s opens too", async (where) => {
+    const data = readFileSync(file).toString("base64"), target = where === "page" ? page.mainFrame() : page.frames().find((frame) => frame.url().includes("taskpane"))!;
+    await target.evaluate(async ([base64, name]) => {
+      const bytes = Uint8Array.from(atob(base64!), (letter) => letter.charCodeAt(0)), transfer = new DataTransfer();
+      transfer.items.add(new File([bytes], name!));
       for (const kind of ["dragenter", "dragover", "drop"]) window.dispatchEvent(new DragEvent(kind, { dataTransfer: transfer, bubbles: true, cancelable: true }));
-    }, data);
-    await page.waitForFunction(() => document.getElementById("file-name")!.textContent === "dropped.xlsx", null, { timeout: 20_000 });
+    }, [data, `dropped on ${where}.xlsx`]);
+    await page.waitForFunction((name) => document.getElementById("file-name")!.textContent === name, `dropped on ${where}.xlsx`, { timeout: 20_000 });
     expect(await value(cell("Tests", 1, 0))).toBe(8.9);
+    expect(await page.locator("#drop").isVisible()).toBe(false);
+  });
+
+  test("the keys for saving work in the pane too", async () => {
+    const download = page.waitForEvent("download");
+    await page.frames().find((frame) => frame.url().includes("taskpane"))!.locator("body").press("Control+s");
+    expect((await download).suggestedFilename()).toMatch(/\.xlsx$/);
   });
 });
 
