@@ -1,4 +1,4 @@
-import { curveDry, curveFlags, effortColumn, mouldWet, peakBlock, peakDry, peakWater } from "../src/worksheet/compaction";
+import { batchWaterColumn, curveDry, curveFlags, effortColumn, fineDryColumn, fineWaterColumn, mouldVolumeColumn, mouldWet, peakBlock, peakDry, peakWater, wholeDryColumn, wholeWaterColumn } from "../src/worksheet/compaction";
 import { cells, reply } from "./reply";
 
 /**
@@ -98,4 +98,77 @@ export function curveDryDensity(at: any[][], waters: any[][], dries: any[][], cu
  */
 export function curveFlagList(waters: any[][], dries: any[][], curve?: any[][], gs?: any[][], waterDensity?: any[][]): any[][] {
   return reply(() => curveFlags({ waters: cells(waters), dries: cells(dries), curve: cells(curve), gs: cells(gs), water: cells(waterDensity) }));
+}
+
+/**
+ * Volume of a mould from its inside diameter and height. A mould's volume is better had by weighing the water it holds.
+ * @customfunction MOULDVOL
+ * @param diameter Inside diameter of the mould, any unit of length. A cell or a column.
+ * @param height Inside height of the mould, without collar, in the same unit.
+ * @returns Volume, in the unit of length cubed: mm give mm³, cm give cm³, in give in³.
+ */
+export function mouldVol(diameter: any[][], height: any[][]): any[][] {
+  return reply(() => mouldVolumeColumn(cells(diameter), cells(height)));
+}
+
+/**
+ * Mass of water to add to a batch of moist soil to bring it to a water content; negative is to dry out.
+ * @customfunction MIXWATER
+ * @param moistMass Moist mass of the batch, any unit. A cell or a column.
+ * @param now Water content now, percent of dry mass.
+ * @param target Water content wanted, percent of dry mass.
+ * @returns Mass of water, in the unit of the batch.
+ */
+export function mixWater(moistMass: any[][], now: any[][], target: any[][]): any[][] {
+  return reply(() => batchWaterColumn(cells(moistMass), cells(now), cells(target)));
+}
+
+/**
+ * Maximum dry density of the whole soil, from that of the fraction tested without its oversize. Interference of the stones is not in it: keep to the standard's limits, commonly up to 30 or 40 % oversize.
+ * @customfunction WHOLEDRY
+ * @param fineDry Maximum dry density of the fine fraction. A cell or a column.
+ * @param stonePct Oversize, percent of the dry mass of the whole soil.
+ * @param stoneGs Bulk specific gravity of the oversize, oven-dry.
+ * @param [waterDensity] Density of water in the unit of the dry density, or that unit as text, such as "lb/ft3". Left out: "Mg/m3".
+ * @returns Dry density of the whole soil, in the unit of the fine fraction's.
+ */
+export function wholeDry(fineDry: any[][], stonePct: any[][], stoneGs: any[][], waterDensity?: any[][]): any[][] {
+  return reply(() => wholeDryColumn(cells(fineDry), cells(stonePct), cells(stoneGs), cells(waterDensity)));
+}
+
+/**
+ * Optimum water content of the whole soil, from that of the fine fraction and the water in the oversize.
+ * @customfunction WHOLEWATER
+ * @param fineWater Water content of the fine fraction, percent of dry mass. A cell or a column.
+ * @param stonePct Oversize, percent of the dry mass of the whole soil.
+ * @param stoneWater Water content of the oversize, percent of its dry mass; often 1 to 2, and a figure below 1 is taken as it stands.
+ * @returns Water content of the whole soil, percent of dry mass.
+ */
+export function wholeWaterContent(fineWater: any[][], stonePct: any[][], stoneWater: any[][]): any[][] {
+  return reply(() => wholeWaterColumn(cells(fineWater), cells(stonePct), cells(stoneWater)));
+}
+
+/**
+ * Dry density of the fine fraction of a whole field sample, to be held against a laboratory test made without the oversize.
+ * @customfunction FINEDRY
+ * @param wholeDry Dry density of the whole soil. A cell or a column.
+ * @param stonePct Oversize, percent of the dry mass of the whole soil.
+ * @param stoneGs Bulk specific gravity of the oversize, oven-dry.
+ * @param [waterDensity] Density of water in the unit of the dry density, or that unit as text, such as "lb/ft3". Left out: "Mg/m3".
+ * @returns Dry density of the fine fraction, in the unit of the whole soil's.
+ */
+export function fineDry(wholeDry: any[][], stonePct: any[][], stoneGs: any[][], waterDensity?: any[][]): any[][] {
+  return reply(() => fineDryColumn(cells(wholeDry), cells(stonePct), cells(stoneGs), cells(waterDensity)));
+}
+
+/**
+ * Water content of the fine fraction of a whole field sample.
+ * @customfunction FINEWATER
+ * @param wholeWater Water content of the whole soil, percent of dry mass. A cell or a column.
+ * @param stonePct Oversize, percent of the dry mass of the whole soil.
+ * @param stoneWater Water content of the oversize, percent of its dry mass; a figure below 1 is taken as it stands.
+ * @returns Water content of the fine fraction, percent of dry mass.
+ */
+export function fineWaterContent(wholeWater: any[][], stonePct: any[][], stoneWater: any[][]): any[][] {
+  return reply(() => fineWaterColumn(cells(wholeWater), cells(stonePct), cells(stoneWater)));
 }

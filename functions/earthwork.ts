@@ -1,4 +1,4 @@
-import { bankVolumeColumn, waterToAdd } from "../src/worksheet/earthwork";
+import { bankVolumeColumn, bulkingColumn, looseLiftColumn, shrinkColumn, swellColumn, waterToAdd } from "../src/worksheet/earthwork";
 import { cells, reply } from "./reply";
 
 /**
@@ -27,4 +27,51 @@ export function waterAdd(volume: any[][], dry: any[][], now: any[][], target: an
  */
 export function bankVol(fillVolume: any[][], fillDry: any[][], bankDry: any[][], lossPct?: any[][]): any[][] {
   return reply(() => bankVolumeColumn(cells(fillVolume), cells(fillDry), cells(bankDry), cells(lossPct)));
+}
+
+/**
+ * Swell from bank to loose: how much more room the soil takes once it is dug.
+ * @customfunction SWELLPCT
+ * @param bankDry Dry density in the bank. A cell or a column.
+ * @param looseDry Loose dry density, same unit.
+ * @param [basis] Volume that the percent is of: "bank" or "loose". Left out: "bank".
+ * @returns Swell, percent.
+ */
+export function swellPct(bankDry: any[][], looseDry: any[][], basis?: any[][]): any[][] {
+  return reply(() => swellColumn(cells(bankDry), cells(looseDry), cells(basis)));
+}
+
+/**
+ * Shrink from bank to fill: how much less room the soil takes once it is compacted. Negative where it takes more, as rock does.
+ * @customfunction SHRINKPCT
+ * @param bankDry Dry density in the bank. A cell or a column.
+ * @param fillDry Dry density of the fill, same unit.
+ * @param [basis] Volume that the percent is of: "bank" or "fill". Left out: "bank".
+ * @returns Shrink, percent.
+ */
+export function shrinkPct(bankDry: any[][], fillDry: any[][], basis?: any[][]): any[][] {
+  return reply(() => shrinkColumn(cells(bankDry), cells(fillDry), cells(basis)));
+}
+
+/**
+ * Loose thickness to spread so that a lift has its thickness once it is compacted.
+ * @customfunction LOOSELIFT
+ * @param thickness Thickness of the compacted lift, any unit. A cell or a column.
+ * @param fillDry Dry density of the compacted fill.
+ * @param looseDry Loose dry density as spread, same unit.
+ * @returns Loose thickness, in the unit of the lift.
+ */
+export function looseLiftThickness(thickness: any[][], fillDry: any[][], looseDry: any[][]): any[][] {
+  return reply(() => looseLiftColumn(cells(thickness), cells(fillDry), cells(looseDry)));
+}
+
+/**
+ * Bulking of moist sand: how much more room it takes than dry or flooded.
+ * @customfunction SANDBULK
+ * @param moistDry Dry density of the sand as it lies moist and loose. A cell or a column.
+ * @param looseDry Dry density of the same sand loose and dry (or flooded), same unit.
+ * @returns Bulking, percent of the volume dry.
+ */
+export function sandBulk(moistDry: any[][], looseDry: any[][]): any[][] {
+  return reply(() => bulkingColumn(cells(moistDry), cells(looseDry)));
 }

@@ -12,6 +12,8 @@ export interface Quantity {
   readonly to: number;
   /** the lower limit itself is refused too */
   readonly above?: true;
+  /** a percent that is rightly below 1, so that a fraction in its place cannot be told */
+  readonly smallShare?: true;
   /** what an argument stands for when it is left out */
   readonly leftOut?: number;
 }
@@ -26,6 +28,12 @@ export const quantities = {
   fillDryDensity: { name: "dry density of the fill", symbol: "ρ_d,fill", kind: "density", ...positive },
   bankDryDensity: { name: "dry density in the bank", symbol: "ρ_d,bank", kind: "density", ...positive },
   waterDensity: { name: "density of water", symbol: "ρ_w", kind: "density", ...positive },
+  minDryDensity: { name: "minimum dry density", symbol: "ρ_d,min", kind: "density", ...positive },
+  looseDryDensity: { name: "loose dry density", symbol: "ρ_d,loose", kind: "density", ...positive },
+  moistDryDensity: { name: "dry density of the moist sand", symbol: "ρ_d,moist", kind: "density", ...positive },
+  fineDryDensity: { name: "dry density of the fine fraction", symbol: "ρ_d,fine", kind: "density", ...positive },
+  wholeDryDensity: { name: "dry density of the whole soil", symbol: "ρ_d,whole", kind: "density", ...positive },
+  sandDensity: { name: "density of the sand", symbol: "ρ_sand", kind: "density", ...positive },
   allowance: { name: "allowance", symbol: "a", kind: "density", ...orZero },
 
   waterContent: { name: "water content", symbol: "w", kind: "percent", from: 0, to: 2000 },
@@ -37,9 +45,19 @@ export const quantities = {
   airVoids: { name: "air voids", symbol: "A", kind: "percent", from: 0, to: 99 },
   porosity: { name: "porosity", symbol: "n", kind: "percent", from: 0, to: 100 },
   relativeCompaction: { name: "relative compaction", symbol: "RC", kind: "percent", from: 0, to: 200 },
+  relativeDensity: { name: "relative density", symbol: "D_r", kind: "percent", from: -100, to: 200 },
+  waterRatio: { name: "water content over optimum", symbol: "w/w_opt", kind: "percent", ...orZero },
+  fineWater: { name: "water content of the fine fraction", symbol: "w_fine", kind: "percent", from: 0, to: 2000 },
+  wholeWater: { name: "water content of the whole soil", symbol: "w_whole", kind: "percent", from: 0, to: 2000 },
+  stonePercent: { name: "oversize", symbol: "P", kind: "percent", from: 0, to: 95 },
+  stoneWater: { name: "water content of the oversize", symbol: "w_stone", kind: "percent", from: 0, to: 40, smallShare: true },
+  swell: { name: "swell", symbol: "s", kind: "percent", from: -100, to: Infinity },
+  shrink: { name: "shrink", symbol: "c", kind: "percent", from: -Infinity, to: 100 },
+  bulking: { name: "bulking", symbol: "b", kind: "percent", from: -100, to: Infinity },
   loss: { name: "loss", symbol: "L", kind: "percent", from: 0, to: 95, leftOut: 0 },
 
   specificGravity: { name: "specific gravity of the solids", symbol: "G_s", kind: "ratio", from: 1, to: 6 },
+  stoneGravity: { name: "bulk specific gravity of the oversize", symbol: "G_stone", kind: "ratio", from: 1, to: 6 },
   voidRatio: { name: "void ratio", symbol: "e", kind: "ratio", ...orZero },
 
   wetMass: { name: "mass of wet soil and tin", symbol: "m_wet", kind: "mass", ...positive },
@@ -47,11 +65,21 @@ export const quantities = {
   tare: { name: "mass of the tin", symbol: "m_tin", kind: "mass", ...orZero, leftOut: 0 },
   mouldAndSoil: { name: "mass of mould and wet soil", symbol: "m_gross", kind: "mass", ...positive },
   mouldMass: { name: "mass of the mould", symbol: "m_mould", kind: "mass", ...orZero },
+  soilMass: { name: "mass of the soil from the hole", symbol: "m_soil", kind: "mass", ...positive },
+  sandUsed: { name: "mass of sand used", symbol: "m_sand", kind: "mass", ...positive },
+  sandInCone: { name: "mass of sand in the cone", symbol: "m_cone", kind: "mass", ...orZero },
+  moistMass: { name: "moist mass of the batch", symbol: "m", kind: "mass", ...positive },
+  addedWater: { name: "water to add", symbol: "Δm", kind: "mass", from: -Infinity, to: Infinity },
   rammerMass: { name: "mass of the rammer", symbol: "m_r", kind: "mass", ...positive },
   mouldVolume: { name: "volume of the mould", symbol: "V", kind: "volume", ...positive },
+  holeVolume: { name: "volume of the hole", symbol: "V_hole", kind: "volume", ...positive },
   volume: { name: "volume", symbol: "V", kind: "volume", ...orZero },
   fillVolume: { name: "volume of the fill", symbol: "V_fill", kind: "volume", ...orZero },
   bankVolume: { name: "volume in the bank", symbol: "V_bank", kind: "volume", ...orZero },
+  mouldDiameter: { name: "diameter of the mould", symbol: "D", kind: "length", ...positive },
+  mouldHeight: { name: "height of the mould", symbol: "H", kind: "length", ...positive },
+  thickness: { name: "thickness of the compacted lift", symbol: "t", kind: "length", ...positive },
+  looseThickness: { name: "loose thickness", symbol: "t_loose", kind: "length", ...positive },
   drop: { name: "drop of the rammer", symbol: "h", kind: "length", ...positive },
   blows: { name: "blows per layer", symbol: "N_b", kind: "count", ...positive },
   layers: { name: "layers", symbol: "N_l", kind: "count", ...positive },

@@ -1,7 +1,8 @@
 import { compactiveEffort } from "../compaction/effort";
 import { curveWords, type CompactionTest, type CurveWord, type Fit, type FitOutcome, type NoFit, type PeakFigure } from "../compaction/fit";
 import { fitTest } from "../compaction/fit-test";
-import { wetDensityInMould } from "../compaction/mould";
+import { mouldVolumeFromMeasures, waterForBatch, wetDensityInMould } from "../compaction/mould";
+import { fineDryDensity, fineWater, wholeDryDensity, wholeWater } from "../compaction/oversize";
 import type { Finding } from "../findings/finding";
 import { densityUnit, densityUnits, SOIL_OVER_WATER } from "../units/density-units";
 import { massUnits, volumeUnits, type MassUnit, type VolumeUnit } from "../units/mass-and-volume-units";
@@ -125,6 +126,18 @@ export function curveFlags(cells: TestCells): Cell[][] | CellError {
 
 export const effortColumn = (rammerMass: Cells, drop: Cells, blows: Cells, layers: Cells, mouldVolume: Cells): Cell[][] | CellError =>
   relationColumn(compactiveEffort, { rammerMass, drop, blows, layers, mouldVolume });
+
+export const mouldVolumeColumn = (mouldDiameter: Cells, mouldHeight: Cells): Cell[][] | CellError => relationColumn(mouldVolumeFromMeasures, { mouldDiameter, mouldHeight });
+export const batchWaterColumn = (moistMass: Cells, waterContent: Cells, targetWater: Cells): Cell[][] | CellError => relationColumn(waterForBatch, { moistMass, waterContent, targetWater });
+
+export const wholeDryColumn = (fine: Cells, stonePercent: Cells, stoneGravity: Cells, water: Cells): Cell[][] | CellError =>
+  relationColumn(wholeDryDensity, { fineDryDensity: fine, stonePercent, stoneGravity, waterDensity: water });
+export const fineDryColumn = (whole: Cells, stonePercent: Cells, stoneGravity: Cells, water: Cells): Cell[][] | CellError =>
+  relationColumn(fineDryDensity, { wholeDryDensity: whole, stonePercent, stoneGravity, waterDensity: water }, { impossible: "the oversize alone would weigh more than the whole soil: check the oversize percent, its specific gravity and the dry density." });
+export const wholeWaterColumn = (fine: Cells, stonePercent: Cells, stoneWater: Cells): Cell[][] | CellError =>
+  relationColumn(wholeWater, { fineWater: fine, stonePercent, stoneWater });
+export const fineWaterColumn = (whole: Cells, stonePercent: Cells, stoneWater: Cells): Cell[][] | CellError =>
+  relationColumn(fineWater, { wholeWater: whole, stonePercent, stoneWater }, { impossible: "the oversize alone would hold more water than the whole soil: check the oversize percent and its water content." });
 
 /** Which unit of mass goes with which unit of volume, where only one is named. */
 const PARTNER_OF_MASS: Readonly<Record<string, string>> = { g: "cm3", kg: "L", lb: "ft3", Mg: "m3" };

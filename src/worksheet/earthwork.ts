@@ -1,4 +1,5 @@
 import { bankVolumeForFill } from "../earthwork/borrow";
+import { bulkingOfSand, looseLift, shrinkOfBank, shrinkOfFill, swellOfBank, swellOfLoose } from "../earthwork/states";
 import { waterNeedGallons, waterNeedLitres, waterToSpray } from "../earthwork/water";
 import { couldBeSoil, densityUnits, unitItLooksLike } from "../units/density-units";
 import { WATER_KG_M3_AT_20 } from "../units/water-density";
@@ -39,4 +40,25 @@ const FILL_OVER_BANK = { low: 0.4, high: 2.5 } as const;
 export const bankVolumeColumn = (fillVolume: Cells, fillDry: Cells, bankDry: Cells, loss: Cells): Cell[][] | CellError =>
   relationColumn(bankVolumeForFill, { fillVolume, fillDryDensity: fillDry, bankDryDensity: bankDry, loss }, {
     guard: ({ fillDryDensity, bankDryDensity }) => sameUnitGuard(fillDryDensity!, "dry density of the fill", bankDryDensity!, "dry density in the bank", FILL_OVER_BANK.low, FILL_OVER_BANK.high),
+  });
+
+const swells = { bank: swellOfBank.by("bankDryDensity", "looseDryDensity"), loose: swellOfLoose.by("bankDryDensity", "looseDryDensity") } as const;
+const shrinks = { bank: shrinkOfBank.by("bankDryDensity", "fillDryDensity"), fill: shrinkOfFill.by("bankDryDensity", "fillDryDensity") } as const;
+
+export const swellColumn = (bankDry: Cells, looseDry: Cells, basis: Cells): Cell[][] | CellError =>
+  column([argument(numberOf("bankDryDensity"), bankDry), argument(numberOf("looseDryDensity"), looseDry), argument(wordOf("basis", ["bank", "loose"], "bank"), basis)],
+    (bank, loose, word) => sameUnitGuard(bank, "dry density in the bank", loose, "loose dry density", FILL_OVER_BANK.low, FILL_OVER_BANK.high) ?? swells[word](bank, loose));
+
+export const shrinkColumn = (bankDry: Cells, fillDry: Cells, basis: Cells): Cell[][] | CellError =>
+  column([argument(numberOf("bankDryDensity"), bankDry), argument(numberOf("fillDryDensity"), fillDry), argument(wordOf("basis", ["bank", "fill"], "bank"), basis)],
+    (bank, fill, word) => sameUnitGuard(bank, "dry density in the bank", fill, "dry density of the fill", FILL_OVER_BANK.low, FILL_OVER_BANK.high) ?? shrinks[word](bank, fill));
+
+export const looseLiftColumn = (thickness: Cells, fillDry: Cells, looseDry: Cells): Cell[][] | CellError =>
+  relationColumn(looseLift, { thickness, fillDryDensity: fillDry, looseDryDensity: looseDry }, {
+    guard: ({ fillDryDensity, looseDryDensity }) => sameUnitGuard(fillDryDensity!, "dry density of the fill", looseDryDensity!, "loose dry density", FILL_OVER_BANK.low, FILL_OVER_BANK.high),
+  });
+
+export const bulkingColumn = (moistDry: Cells, looseDry: Cells): Cell[][] | CellError =>
+  relationColumn(bulkingOfSand, { moistDryDensity: moistDry, looseDryDensity: looseDry }, {
+    guard: ({ moistDryDensity, looseDryDensity }) => sameUnitGuard(moistDryDensity!, "dry density of the moist sand", looseDryDensity!, "loose dry density", FILL_OVER_BANK.low, FILL_OVER_BANK.high),
   });

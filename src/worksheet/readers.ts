@@ -43,13 +43,13 @@ function notANumber(name: string, value: unknown): CellError {
 
 /** A number of a known quantity, within what the quantity can mean. */
 export function numberOf(id: QuantityId): Reader<number> {
-  const { name, kind, from, to, above, leftOut } = quantity(id);
+  const { name, kind, from, to, above, leftOut, smallShare } = quantity(id);
   const percent = kind === "percent";
   const inside = (value: number): boolean => value <= to && (above ? value > from : value >= from);
   return {
     name,
     ...(leftOut === undefined ? {} : { leftOut }),
-    ...(percent ? { check: (block) => looksLikeFractions(block) ? fractionRefusal(name) : undefined } : {}),
+    ...(percent && !smallShare ? { check: (block) => looksLikeFractions(block) ? fractionRefusal(name) : undefined } : {}),
     plain: (value) => typeof value === "number" && inside(value) && Number.isFinite(value),
     read(value) {
       if (value instanceof CellError) return value;

@@ -1,5 +1,5 @@
 import { numberOf, waterDensity, type Reader } from "./readers";
-import type { QuantityId } from "../relations/quantities";
+import { quantity, type QuantityId } from "../relations/quantities";
 import type { Relation } from "../relations/relation";
 import { refusal, type Block, type Cell, type CellError } from "./cell";
 import { argument, column } from "./column";
@@ -23,10 +23,13 @@ export function relationColumn<In extends QuantityId>(
 ): Cell[][] | CellError {
   const order = Object.keys(blocks) as In[];
   const compute = relation.by(...order);
-  const dry = order.indexOf("dryDensity" as In), water = order.indexOf("waterDensity" as In);
+  const water = order.indexOf("waterDensity" as In);
+  // beside a density of water, every other density must be a soil's in the same unit
+  const soils = water < 0 ? [] : order.flatMap((id, i) => id !== "waterDensity" && quantity(id).kind === "density" ? [i] : []);
   return column<number[]>(order.map((id) => argument(readerOf(id), blocks[id])), (...values) => {
-    const trouble = (dry >= 0 && water >= 0 ? unitGuard(values[dry]!, values[water]!) : undefined)
-      ?? guard?.(Object.fromEntries(order.map((id, i) => [id, values[i]!])));
+    let trouble: CellError | undefined;
+    for (const i of soils) trouble ??= unitGuard(values[i]!, values[water]!);
+    trouble ??= guard?.(Object.fromEntries(order.map((id, i) => [id, values[i]!])));
     if (trouble) return trouble;
     const result = compute(...values);
     return impossible !== undefined && !(result >= 0 && result < Infinity) ? refusal(impossible) : result;

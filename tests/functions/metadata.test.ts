@@ -6,8 +6,10 @@ const { functions, allowErrorForDataTypeAny, allowCustomDataForDataTypeAny } = m
 /** What the catalogue asks for in this release. */
 const CATALOGUE = [
   "WATERPCT", "DRYBASIS", "SOILDRY", "SOILWET", "VOIDFREE", "AIRLINE", "SATLINE", "FULLWATER", "SATPCT", "AIRPCT", "VOIDRATIO", "POREPCT", "LEASTGS", "PASTZAV", "WATERDENS", "DENSITYAS",
+  "MOULDVOL", "MIXWATER", "WHOLEDRY", "WHOLEWATER", "FINEDRY", "FINEWATER",
   "MOULDWET", "BLOWWORK", "PEAKFIT", "PEAKDRY", "PEAKWATER", "CURVEDRY", "CURVEFLAGS",
-  "RELCOMP", "WATERGAP", "WATERADD", "BANKVOL",
+  "RELCOMP", "WATERGAP", "WATERRATIO", "RELDENSITY", "SANDCONE", "HOLEWET",
+  "WATERADD", "BANKVOL", "SWELLPCT", "SHRINKPCT", "LOOSELIFT", "SANDBULK",
 ];
 
 test("every function of the catalogue is there, once, in metadata and bundle alike", () => {

@@ -96,3 +96,37 @@ test("BLOWWORK grows in proportion to every one of mass, drop, blows and layers,
   const effort = one("BLOWWORK", m, drop, 25, 3, 944);
   for (const doubled of [[2 * m, drop, 25, 3, 944], [m, 2 * drop, 25, 3, 944], [m, drop, 50, 3, 944], [m, drop, 25, 6, 944], [m, drop, 25, 3, 472]]) close(one("BLOWWORK", ...doubled), 2 * effort);
 }));
+test("FINEDRY undoes WHOLEDRY, FINEWATER undoes WHOLEWATER, in any unit", () => holds<[number, number, number]>([density, fc.double({ min: 5, max: 40, noNaN: true }), fc.double({ min: 2.4, max: 2.9, noNaN: true })], (fine, stones, gs) => {
+  const whole = one("WHOLEDRY", fine, stones, gs);
+  close(one("FINEDRY", whole, stones, gs), fine);
+  // the whole lies between its two fractions
+  expect((whole - fine) * (gs * 0.9982 - whole)).toBeGreaterThanOrEqual(-1e-9);
+  const pcf = one("DENSITYAS", 1, "Mg/m3", "lb/ft3");
+  close(one("WHOLEDRY", fine * pcf, stones, gs, "lb/ft3") / pcf, whole, 1e-8);
+  close(one("FINEWATER", one("WHOLEWATER", 12, stones, 0.7), stones, 0.7), 12);
+}));
+test("RELDENSITY runs from 0 at the loosest to 100 at the densest, and rises between", () => holds<[number, number]>([density, fc.double({ min: 0.02, max: 0.98, noNaN: true })], (most, share) => {
+  const least = 0.8 * most, dry = least + share * (most - least);
+  close(one("RELDENSITY", least, least, most), 0);
+  close(one("RELDENSITY", most, least, most), 100);
+  const here = one("RELDENSITY", dry, least, most);
+  expect(here > 0 && here < 100 && one("RELDENSITY", dry * 1.001, least, most) > here).toBe(true);
+}));
+test("SANDCONE is HOLEWET of the hole that the sand filled", () => holds<[number, number, number]>([mass, density, fc.double({ min: 1, max: 300, noNaN: true })], (soil, sand, volume) => {
+  close(one("SANDCONE", soil, 40 + sand * volume, 40, sand), one("HOLEWET", soil, volume), 1e-8);
+}));
+test("MIXWATER brings a batch to its target", () => holds<[number, number, number]>([mass, water, water], (batch, now, target) => {
+  const dry = batch / (1 + now / 100);
+  close(100 * (batch + one("MIXWATER", batch, now, target) - dry) / dry, target, 1e-8);
+}));
+test("MOULDVOL grows with the square of the diameter and with the height", () => holds<[number, number]>([share, share], (d, h) => { close(one("MOULDVOL", 2 * d, h), 4 * one("MOULDVOL", d, h)); close(one("MOULDVOL", d, 3 * h), 3 * one("MOULDVOL", d, h)); }));
+test("swell, shrink, loose lift and bulking tell of the same volumes", () => holds<[number, number]>([density, fc.double({ min: 0.6, max: 0.95, noNaN: true })], (bank, k) => {
+  const swell = one("SWELLPCT", bank, k * bank), ofLoose = one("SWELLPCT", bank, k * bank, "loose");
+  close((1 + swell / 100) * (1 - ofLoose / 100), 1);
+  close(one("LOOSELIFT", 150, bank, k * bank), 150 * (1 + swell / 100));
+  close(one("SANDBULK", k * bank, bank), swell);
+  close((1 - one("SHRINKPCT", k * bank, bank) / 100) * (1 + one("SHRINKPCT", k * bank, bank, "fill") / 100), 1);
+}));
+test("WATERRATIO of the optimum is 100, and agrees with WATERGAP", () => holds<[number, number]>([water, water], (w, optimum) => {
+  close(one("WATERRATIO", w, optimum), 100 + 100 * one("WATERGAP", w, optimum) / optimum, 1e-8);
+}));

@@ -1,8 +1,11 @@
 import { compactiveEffort } from "../../src/compaction/effort";
-import { wetDensityInMould } from "../../src/compaction/mould";
+import { mouldVolumeFromMeasures, waterForBatch, wetDensityInMould } from "../../src/compaction/mould";
+import { fineDryDensity, fineWater, wholeDryDensity, wholeWater } from "../../src/compaction/oversize";
 import { bankVolumeForFill } from "../../src/earthwork/borrow";
+import { bulkingOfSand, looseLift, shrinkOfBank, shrinkOfFill, swellOfBank, swellOfLoose } from "../../src/earthwork/states";
 import { waterNeedGallons, waterNeedLitres, waterToSpray } from "../../src/earthwork/water";
-import { relativeCompaction, waterGap } from "../../src/field/relative-compaction";
+import { relativeCompaction, relativeDensity, waterGap, waterRatio } from "../../src/field/relative-compaction";
+import { wetDensityBySand, wetDensityOfHole } from "../../src/field/sand-replacement";
 import { dryDensityFromWet, wetDensityFromDry } from "../../src/phase/density";
 import { airVoidsLine, airVoidsOfPoint, degreeOfSaturation, leastSpecificGravity, saturationLine, saturationWater, zeroAirVoids } from "../../src/phase/lines";
 import { porosityFromDensity, voidRatioFromDensity } from "../../src/phase/voids";
@@ -93,6 +96,28 @@ export const figures: readonly Figure[] = [
     relation: as(waterContentFromWetBasis), inputs: { wetBasisWater }, says, source: "AASHTO T 217: reading on wet mass to water content, derived from its formula" })),
   { relation: as(wetDensityInMould), inputs: { mouldAndSoil: 3168, mouldMass: 1125, mouldVolume: 1000 }, says: "2.043", source: "exercise of a UK soil-mechanics text (set A), first point" },
   { relation: as(wetDensityInMould), inputs: { mouldAndSoil: 4231, mouldMass: 2015, mouldVolume: 1017.6 }, says: "2.178", source: `${sheetG}, third point: 1.86 dry at 17.10 %` },
+  { relation: as(wholeDryDensity), inputs: { fineDryDensity: 1.97, stonePercent: 10, stoneGravity: 2.73, waterDensity: 1 }, says: "2.03", source: "exercise of a UK soil-mechanics text (set A), part 2" },
+  { relation: as(wholeDryDensity), inputs: { fineDryDensity: 134.0, stonePercent: 9.4, stoneGravity: 2.7, waterDensity: 62.4 }, says: "136.63", source: "municipal D1557 record (set O), recomputed (it prints 136.5, to the nearest 0.5)" },
+  { relation: as(wholeDryDensity), inputs: { fineDryDensity: 120.0, stonePercent: 15, stoneGravity: 2.65, waterDensity: 62.4 }, says: "125.15", source: "derived from ASTM D4718" },
+  { relation: as(wholeDryDensity), inputs: { fineDryDensity: 118.0, stonePercent: 25, stoneGravity: 2.6, waterDensity: 62.4 }, says: "126.63", source: "derived from ASTM D4718" },
+  { relation: as(fineDryDensity), inputs: { wholeDryDensity: 125.15, stonePercent: 15, stoneGravity: 2.65, waterDensity: 62.4 }, says: "120.0", source: "the same, read backwards" },
+  { relation: as(wholeWater), inputs: { fineWater: 12.0, stonePercent: 15, stoneWater: 2.0 }, says: "10.5", source: "a state's copy of AASHTO T 224: (12.0 x 85 + 2.0 x 15) / 100" },
+  { relation: as(wholeWater), inputs: { fineWater: 7.5, stonePercent: 9.4, stoneWater: 1.0 }, says: "6.89", source: "municipal D1557 record (set O), recomputed (it prints 7.0, to the nearest 0.5)" },
+  { relation: as(fineWater), inputs: { wholeWater: 10.5, stonePercent: 15, stoneWater: 2.0 }, says: "12.0", source: "the same, read backwards" },
+  ...([[16.341, 14.2, 16.9, "82.0"], [15.98, 13.8, 17, "72.5"], [15.725, 15.4, 18.5, "12.3"]] as const).map(([dryDensity, minDryDensity, maxDryDensity, says]) => ({
+    relation: as(relativeDensity), inputs: { dryDensity, minDryDensity, maxDryDensity }, says, source: `${text9}, problems 6.12 to 6.14` })),
+  { relation: as(waterRatio), inputs: { waterContent: 12, optimumWater: 13.5 }, says: "88.9", source: "derived from its definition" },
+  { relation: as(wetDensityBySand), inputs: { soilMass: 8.11, sandUsed: 7.0, sandInCone: 0.53, sandDensity: 99.0 }, says: "124.09", source: "published sand-cone problem: sand of 99.0 lb/ft3, hole 0.065354 ft3; derived, as it is unsolved there" },
+  { relation: as(wetDensityOfHole), inputs: { soilMass: 8.11, holeVolume: 0.065354 }, says: "124.09", source: "the same, from the volume of its hole" },
+  { relation: as(mouldVolumeFromMeasures), inputs: { mouldDiameter: 101.175, mouldHeight: 116.2 }, says: "934205.5", source: "student report after D698 (set H): 934 205.5 mm3", within: 0.3 },
+  { relation: as(mouldVolumeFromMeasures), inputs: { mouldDiameter: 10.5, mouldHeight: 11.55 }, says: "1000.1", source: "BS 1377-4 one-litre mould, derived" },
+  { relation: as(waterForBatch), inputs: { moistMass: 1000, waterContent: 5, targetWater: 11 }, says: "57.14", source: "derived: 952.4 g of dry soil and six points" },
+  { relation: as(swellOfBank), inputs: { bankDryDensity: 1, looseDryDensity: 0.8 }, says: "25.0", source: "FM 5-434: dry earth, swell 25 %, load factor 0.80" },
+  { relation: as(swellOfLoose), inputs: { bankDryDensity: 1, looseDryDensity: 0.8 }, says: "20.0", source: "the same, of the loose volume: 1 - 0.80" },
+  { relation: as(shrinkOfBank), inputs: { bankDryDensity: 0.9, fillDryDensity: 1 }, says: "10.0", source: "FM 5-434: common earth, bank to compacted 0.90" },
+  { relation: as(shrinkOfFill), inputs: { bankDryDensity: 0.9, fillDryDensity: 1 }, says: "11.1", source: "the same: compacted to bank 1.11" },
+  { relation: as(looseLift), inputs: { thickness: 1, fillDryDensity: 1 / 0.9, looseDryDensity: 1 / 1.25 }, says: "1.39", source: "FM 5-434: common earth, compacted to loose 1.39 from its 1.25 and 0.90" },
+  { relation: as(bulkingOfSand), inputs: { moistDryDensity: 160, looseDryDensity: 200 }, says: "25.0", source: "IS 2386-3 example: 200 mm moist, 160 mm flooded" },
   { relation: as(waterGap), inputs: { waterContent: 13.7, optimumWater: 12.5 }, says: "1.2", source: `${text9}, problems 6.4 and 6.5: field water against the water content of the highest point` },
   { relation: as(waterNeedLitres), inputs: { volume: 1, dryDensity: 1.8, waterContent: 10, targetWater: 11 }, says: "18", source: "18 L per m3 for 1.8 t/m3 and one point: common practice, no published source" },
   { relation: as(waterNeedLitres), inputs: { volume: 960000, dryDensity: 1.85, waterContent: 8, targetWater: 11.6 }, says: "63936000", source: "published problem: 960 000 m3, 3.6 points at 1.85 t/m3 give 63 936 m3 of water" },

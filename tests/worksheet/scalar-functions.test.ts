@@ -1,6 +1,7 @@
 import { CellError, type Block, type Cell } from "../../src/worksheet/cell";
-import { bankVolumeColumn, waterToAdd } from "../../src/worksheet/earthwork";
-import { relativeCompactionColumn, waterGapColumn } from "../../src/worksheet/field";
+import { bankVolumeColumn, shrinkColumn, swellColumn, waterToAdd } from "../../src/worksheet/earthwork";
+import { fineDryColumn, fineWaterColumn, wholeDryColumn, wholeWaterColumn } from "../../src/worksheet/compaction";
+import { relativeCompactionColumn, relativeDensityColumn, sandConeColumn, waterGapColumn, waterRatioColumn } from "../../src/worksheet/field";
 import { densityAs, pastZeroAirVoids, waterDensityAt } from "../../src/worksheet/mass-and-volume";
 
 const at = (value: unknown): Block => [[value]];
@@ -60,4 +61,28 @@ describe("earthwork", () => {
   test("an unknown system lists the choices", () => expect(add(1, 1.8, 10, 11, null, "metric")).toEqual(says(/"SI", "US"/)));
   test("a loss of everything cannot be made up", () => expect(add(1, 1.8, 10, 11, 100, null)).toEqual(says(/between 0 and 95/)));
   test("borrow in two units is refused", () => expect(only(bankVolumeColumn(at(100), at(115), at(1.7), null))).toEqual(says(/one unit/)));
+});
+
+describe("what the further relations refuse", () => {
+  test("a density in another unit than the density of water's", () => expect(only(wholeDryColumn(at(134), at(9.4), at(2.7), null))).toEqual(says(/give "lb\/ft3"/)));
+  test("water of the oversize below 1 % is taken as it stands, the fine fraction's is not", () => {
+    expect(only(wholeWaterColumn(at(12), at(10), at(0.5)))).toBeCloseTo(10.85, 10);
+    expect(wholeWaterColumn(at(0.12), at(10), at(0.5))).toEqual(says(/fractions/));
+  });
+  test("more oversize than the whole weighs, or holds", () => {
+    expect(only(fineDryColumn(at(1.2), at(80), at(2.7), null))).toBeGreaterThan(0);
+    expect(only(fineWaterColumn(at(2), at(90), at(3)))).toEqual(says(/hold more water than the whole/));
+  });
+  test("limits of density the wrong way round, or in two units", () => {
+    expect(only(relativeDensityColumn(at(1.6), at(1.8), at(1.5)))).toEqual(says(/must be above the minimum/));
+    expect(only(relativeDensityColumn(at(100), at(1.4), at(1.7)))).toEqual(says(/one unit/));
+    // outside its limits is a finding, not an error
+    expect(only(relativeDensityColumn(at(1.75), at(1.4), at(1.7)))).toBeGreaterThan(100);
+  });
+  test("no sand in the hole", () => expect(only(sandConeColumn(at(8), at(0.5), at(0.53), at(99)))).toEqual(says(/must be above the mass of sand in the cone/)));
+  test("an optimum of nothing", () => expect(only(waterRatioColumn(at(12), at(0)))).toEqual(says(/above 0/)));
+  test("a basis that is not known lists those that are", () => {
+    expect(only(swellColumn(at(1.8), at(1.4), at("fill")))).toEqual(says(/"bank", "loose"/));
+    expect(only(shrinkColumn(at(1.8), at(115), null))).toEqual(says(/one unit/));
+  });
 });

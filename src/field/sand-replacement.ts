@@ -1,0 +1,11 @@
+import { relation } from "../relations/relation";
+
+/** Wet density by sand replacement: the hole's volume is that of the sand it took, the cone's share taken off. */
+export const wetDensityBySand = relation(
+  "wetDensity", "soilMass * sandDensity / (sandUsed - sandInCone)",
+  { title: "ASTM D1556", clause: "calculation of in-place density by the sand-cone method" });
+
+/** Wet density where the volume of the hole is measured, by balloon or water. */
+export const wetDensityOfHole = relation(
+  "wetDensity", "soilMass / holeVolume",
+  { title: "ASTM D2167 and D5030", clause: "calculation of in-place density from the volume of the hole" });
