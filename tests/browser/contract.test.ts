@@ -31,11 +31,11 @@ async function benchHost(): Promise<ContractHost> {
   }, [method, args.map(pack)] as const));
 
   const heard = new Map<string, (area: Area) => void>();
-  let listeners = 0;
+  let listeners = 0, attached: Promise<unknown> = Promise.resolve();
   const on = (event: PortEvent, hear: (area: Area) => void): (() => void) => {
     const id = `heard${Date.now()}${listeners++}`;
     heard.set(id, hear);
-    void page.exposeFunction(id, (at: Area) => heard.get(id)?.(at)).then(() => page.evaluate(([name, to]) => {
+    attached = page.exposeFunction(id, (at: Area) => heard.get(id)?.(at)).then(() => page.evaluate(([name, to]) => {
       window.bench.desk!.port.on(name as PortEvent, (at) => void (window as unknown as Record<string, (at: Area) => void>)[to!]!(at));
     }, [event, id]));
     return () => heard.delete(id);
@@ -47,6 +47,7 @@ async function benchHost(): Promise<ContractHost> {
     window.bench.desk!.preview().sheets.map(({ name, cells, notes, marks }) => ({ name, cells: JSON.stringify(cells), notes: [...notes], marks: marks.length })));
   return {
     port,
+    listening: async () => { await attached; },
     note: async (sheet, row, column) => (await saved()).find(({ name }) => name === sheet)!.notes.find((note) => note.row === row && note.column === column)?.text ?? null,
     ourMarks: async (sheet) => (await saved()).find(({ name }) => name === sheet)!.marks,
     users: async () => JSON.stringify((await saved()).map(({ name, cells, notes }) => ({ name, cells, notes: notes.filter(({ ours }) => !ours) }))),
