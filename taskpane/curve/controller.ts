@@ -44,6 +44,9 @@ export class CurveController {
   private readonly pending = new Set<PortEvent>();
   private around: Snapshot | null = null;
   private turn = 0;
+  /** how often the user has chosen, and what of it is still on its way into the workbook */
+  private chosen = 0;
+  private remembering: Promise<unknown> = Promise.resolve();
 
   constructor(
     private readonly port: WorkbookPort, private readonly view: View, private readonly fitter: Fitter,
@@ -164,10 +167,14 @@ export class CurveController {
   }
 
   private async take(turn: number, snapshot: Snapshot): Promise<void> {
-    const remembered = readChoices(await this.port.recall(keyOf(snapshot.area)));
+    const key = keyOf(snapshot.area), { chosen } = this;
+    await this.remembering.catch(() => undefined);
+    const remembered = readChoices(await this.port.recall(key));
     const around = await this.readAround(snapshot.area);
     if (turn !== this.turn) return;
-    Object.assign(this, { snapshot, around, choices: remembered, consent: null });
+    // what the user chose for this very table while it was being read is newer than what the workbook remembered
+    const newer = this.chosen !== chosen && this.snapshot !== null && keyOf(this.snapshot.area) === key;
+    Object.assign(this, { snapshot, around, choices: newer ? this.choices : remembered, consent: null });
     this.refresh();
   }
 
@@ -192,10 +199,14 @@ export class CurveController {
   /** The user's word: kept in the workbook for this table, and the pane follows. */
   async choose(change: Partial<Choices>): Promise<void> {
     if (!this.snapshot) return;
+    this.chosen++;
     this.choices = { ...this.choices, ...change };
     this.consent = null;
+    const key = keyOf(this.snapshot.area), written = writeChoices(this.choices);
     this.refresh();
-    await this.port.remember(keyOf(this.snapshot.area), writeChoices(this.choices));
+    // one after the other, so that the last word is the one that stays
+    this.remembering = this.remembering.catch(() => undefined).then(() => this.port.remember(key, written));
+    await this.remembering;
   }
 
   async goTo(area: Area): Promise<void> {

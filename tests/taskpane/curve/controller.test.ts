@@ -30,6 +30,20 @@ async function open(selected: Area | null = TABLE, rows = LAB): Promise<{ book: 
 }
 
 describe("following the selection", () => {
+  test("what the user chooses while the table is read again is not lost to what was remembered before", async () => {
+    const { book, controller, shown, settle } = await open();
+    const recall = book.recall.bind(book);
+    let answer = (): void => undefined;
+    const held = new Promise<void>((resolve) => { answer = resolve; });
+    book.recall = async (key) => { const before = await recall(key); await held; return before; };
+    book.select({ ...TABLE });
+    await settle();
+    await controller.choose({ waterDensity: "1" });
+    expect(shown().look!.choices.waterDensity).toBe("1");
+    answer();
+    await settle();
+    expect(shown().look!.choices.waterDensity).toBe("1");
+  });
   test("the selected table is read at once, with the specific gravity beside it", async () => {
     const { shown } = await open();
     expect(shown().look!.recognised).toContain("4 points, B4:C7");
