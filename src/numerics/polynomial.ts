@@ -14,8 +14,12 @@ export interface PolynomialFit {
   readonly triangle: Float64Array;
 }
 
-/** @throws Error where there are fewer points, or fewer different x, than coefficients: the caller checks that first. */
-export function fitPolynomial(x: readonly number[], y: readonly number[], degree: number): PolynomialFit {
+/**
+ * `weights` multiply the residuals (the inverse of each point's standard deviation); a point of weight 0 is left out.
+ * The sum of squares is the weighted one.
+ * @throws Error where there are fewer points, or fewer different x, than coefficients: the caller checks that first.
+ */
+export function fitPolynomial(x: readonly number[], y: readonly number[], degree: number, weights?: readonly number[]): PolynomialFit {
   const n = x.length, p = degree + 1;
   if (n < p) throw new Error(`${p} coefficients need at least ${p} points, not ${n}`);
   let least = Infinity, most = -Infinity;
@@ -30,17 +34,22 @@ export function fitPolynomial(x: readonly number[], y: readonly number[], degree
   for (let i = 0; i < n; i++) {
     const u = (x[i]! - centre) / halfWidth;
     let power = 1;
+    if (weights) {
+      power = weights[i]!;
+      b[i]! *= power;
+    }
     for (let k = 0; k < p; k++) {
       a[k * n + i] = power;
       power *= u;
     }
   }
+  const size = weights ? Math.sqrt(weights.reduce((sum, weight) => sum + weight * weight, 0)) : Math.sqrt(n);
   for (let k = 0; k < p; k++) {
     const column = k * n;
     let norm = 0;
     for (let i = k; i < n; i++) norm += a[column + i]! * a[column + i]!;
     norm = Math.sqrt(norm);
-    if (norm < 1e-13 * Math.sqrt(n)) throw new Error(`${p} coefficients need at least ${p} different x`);
+    if (norm < 1e-13 * size) throw new Error(`${p} coefficients need at least ${p} different x`);
     const pivot = a[column + k]!, alpha = pivot > 0 ? -norm : norm;
     // v = column − alpha e_k, H = I − v vᵀ / (alpha (alpha − pivot))
     a[column + k] = pivot - alpha;
