@@ -32,7 +32,7 @@ const ROOMS: Readonly<Record<string, readonly string[]>> = {
   "src/findings": ["src/relations"],
   "src/field": ["src/relations"],
   "src/earthwork": ["src/relations"],
-  "src/compaction": ["src/relations", "src/phase", "src/numerics", "src/findings"],
+  "src/compaction": ["src/relations", "src/units", "src/phase", "src/numerics", "src/findings"],
   "src/worksheet": ["src/relations", "src/units", "src/phase", "src/findings", "src/compaction", "src/field", "src/earthwork"],
   "src/tables": ["src/relations", "src/units", "src/phase", "src/compaction", "src/worksheet"],
   "src/workbook/office": ["src/worksheet"],

@@ -137,6 +137,12 @@ function scaledLength(at: Float64Array, scale: Float64Array, free: readonly numb
   return Math.sqrt(sum);
 }
 
+/** Length of a pair without overflow; Math.hypot promises the same at many times the cost. */
+function lengthOf(a: number, b: number): number {
+  const most = Math.max(Math.abs(a), Math.abs(b)), least = Math.min(Math.abs(a), Math.abs(b));
+  return most === 0 ? 0 : most * Math.sqrt(1 + (least / most) ** 2);
+}
+
 /** The triangular factor of the Jacobian's free columns, and steps of any damping from it. */
 class Workspace {
   private readonly a: Float64Array;
@@ -171,9 +177,11 @@ class Workspace {
       for (let k = 0; k < q; k++) a[i * q + k] = 0;
     }
     for (let k = 0; k < q; k++) {
-      let norm = 0;
-      for (let i = k; i < rows; i++) norm = Math.hypot(norm, a[i * q + k]!);
-      if (norm === 0) continue;
+      let most = 0, norm = 0;
+      for (let i = k; i < rows; i++) most = Math.max(most, Math.abs(a[i * q + k]!));
+      if (most === 0) { this.diagonal[k] = 0; continue; }
+      for (let i = k; i < rows; i++) norm += (a[i * q + k]! / most) ** 2;
+      norm = most * Math.sqrt(norm);
       if (a[k * q + k]! > 0) norm = -norm;
       for (let i = k; i < rows; i++) a[i * q + k]! /= -norm;
       a[k * q + k]! += 1;
@@ -207,7 +215,7 @@ class Workspace {
         line[k] = root * scale[free[k]!]!;
         for (let j = k; j < q; j++) {
           if (line[j] === 0) continue;
-          const length = Math.hypot(t[j * q + j]!, line[j]!), cos = t[j * q + j]! / length, sin = line[j]! / length;
+          const length = lengthOf(t[j * q + j]!, line[j]!), cos = t[j * q + j]! / length, sin = line[j]! / length;
           t[j * q + j] = length;
           for (let m = j + 1; m < q; m++) {
             const upper = t[j * q + m]!;

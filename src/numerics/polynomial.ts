@@ -128,3 +128,35 @@ export function spreadAt({ triangle, degree }: PolynomialFit, u: number): Spread
   }
   return { value, slope, both };
 }
+
+/** Derivatives of value and slope at u by the coefficients: (1, u, u², …) and (0, 1, 2u, …). */
+export function gradientsAt(coefficients: number, u: number): { readonly value: Float64Array; readonly slope: Float64Array } {
+  const value = new Float64Array(coefficients), slope = new Float64Array(coefficients);
+  let power = 1, lower = 0;
+  for (let k = 0; k < coefficients; k++) {
+    value[k] = power;
+    slope[k] = k * lower;
+    lower = power;
+    power *= u;
+  }
+  return { value, slope };
+}
+
+/** How the coefficients move with each point's y, one row a point: w² (XᵀW²X)⁻¹ (1, u, u², …). */
+export function influences(fit: PolynomialFit, x: readonly number[], weights?: readonly number[]): Float64Array {
+  const { triangle, degree } = fit, p = degree + 1, out = new Float64Array(x.length * p);
+  x.forEach((value, i) => {
+    const g = gradientsAt(p, scaled(fit, value)).value, row = i * p, weight = weights ? weights[i]! ** 2 : 1;
+    for (let k = 0; k < p; k++) {
+      let sum = g[k]! * weight;
+      for (let j = 0; j < k; j++) sum -= triangle[j * p + k]! * out[row + j]!;
+      out[row + k] = sum / triangle[k * p + k]!;
+    }
+    for (let k = p - 1; k >= 0; k--) {
+      let sum = out[row + k]!;
+      for (let j = k + 1; j < p; j++) sum -= triangle[k * p + j]! * out[row + j]!;
+      out[row + k] = sum / triangle[k * p + k]!;
+    }
+  });
+  return out;
+}

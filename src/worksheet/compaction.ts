@@ -1,5 +1,5 @@
 import { compactiveEffort } from "../compaction/effort";
-import { curveWords, type CompactionTest, type CurveWord, type Fit, type FitOutcome, type NoFit, type PeakFigure } from "../compaction/fit";
+import { curveName, curveWords, type CompactionTest, type CurveWord, type Fit, type FitOutcome, type NoFit, type PeakFigure } from "../compaction/fit";
 import { fitTest } from "../compaction/fit-test";
 import { mouldVolumeFromMeasures, waterForBatch, wetDensityInMould } from "../compaction/mould";
 import { fineDryDensity, fineWater, wholeDryDensity, wholeWater } from "../compaction/oversize";
@@ -90,6 +90,9 @@ export function peakBlock(cells: TestCells): Cell[][] | CellError {
     ["air voids at the optimum, %", fit.airVoidsAtOptimum ?? needsGravity, "", ""],
     ["points used", fit.used.length, `of ${fit.test.waters.length}`, ""],
     ["what to look at", first ? first.says : "nothing found", more.length > 0 ? `and ${more.length} more: see CURVEFLAGS` : "", ""],
+    ["curves that do as well", fit.otherCurves.length > 0 ? fit.otherCurves.map(({ curve }) => curveName(curve)).join(", ") : "none", "", ""],
+    figure("dry density, whichever of them", { value: fit.maxDryDensity.value, ...fit.joined.maxDryDensity }),
+    figure("optimum, whichever of them, %", { value: fit.optimumWater.value, ...fit.joined.optimumWater }),
   ];
 }
 

@@ -202,5 +202,5 @@ export function plotWords(look: Look): string {
   ].filter((part) => part !== "").join(" ");
 }
 
-export const CURVE_NAMES: Readonly<Record<CurveWord, string>> = { auto: "Automatic", parabola: "Parabola", cubic: "Cubic", "top three": "Top three points" };
+export const CURVE_NAMES: Readonly<Record<CurveWord, string>> = { auto: "Automatic", parabola: "Parabola", cubic: "Cubic", quartic: "Quartic", saturation: "Saturation curve", smooth: "Smooth curve", "top three": "Top three points" };
 export const SEVERITY_WORDS: Readonly<Record<Severity, string>> = { impossible: "Not possible", doubtful: "Doubtful", ask: "Question" };

@@ -1,4 +1,5 @@
 import { allPoints, distinctWaters, type Curve } from "./curve";
+import { fitPolynomialCurve } from "./polynomial-curve";
 
 /**
  * A cubic through all points by least squares: it may fall faster on one side than on the other.
@@ -6,8 +7,8 @@ import { allPoints, distinctWaters, type Curve } from "./curve";
  */
 export const cubic: Curve = {
   id: "cubic",
-  degree: 3,
+  parameters: 4,
   weighed: true,
   needs: "at least four different water contents",
-  pointsOf: (test) => distinctWaters(test) >= 4 ? allPoints(test) : undefined,
+  fit: (test, options) => fitPolynomialCurve(cubic, test, distinctWaters(test) >= 4 ? allPoints(test) : undefined, options),
 };

@@ -1,5 +1,6 @@
 import { rule } from "../../findings/finding";
 import { LINE_ALLOWANCE, zeroAirVoids } from "../../phase/lines";
+import { curveName } from "../fit";
 import type { CurveSubject } from "./subject";
 
 const STEPS = 100;
@@ -15,7 +16,7 @@ export const curvePastLine = rule<CurveSubject>()({
     for (let step = 0; step <= STEPS; step++) {
       const water = driest + (wettest - driest) * step / STEPS;
       if (fit.at(water) <= zeroAirVoids.value({ waterContent: water, specificGravity, waterDensity }) * (1 + LINE_ALLOWANCE)) continue;
-      yield { place: { at: "whole" }, severity: "doubtful", evidence: { curve: fit.curve, water: Number(water.toFixed(1)) } };
+      yield { place: { at: "whole" }, severity: "doubtful", evidence: { curve: curveName(fit.curve), water: Number(water.toFixed(1)) } };
       return;
     }
   },

@@ -1,15 +1,22 @@
 import { curvePastLine } from "./curve-past-line";
+import { curvesDisagree } from "./curves-disagree";
 import { gap } from "./gap";
+import { influentialPoint } from "./influential-point";
 import { missesPoints } from "./misses-points";
 import { notBracketed } from "./not-bracketed";
 import { outlier } from "./outlier";
 import { pastLine } from "./past-line";
 import { repeatedPoints } from "./repeated-points";
+import { highestPointReported, reportedElsewhere, reportingPrecision } from "./reported-peak";
+import { saturationAtOptimum } from "./saturation-at-optimum";
 import { gravityAssumed, gravityImplausible } from "./specific-gravity";
 import { standsAbove } from "./stands-above";
+import { tinsDiffer } from "./tins-differ";
 import { tooFewPoints } from "./too-few-points";
+import { wetLeg } from "./wet-leg";
 
 /** Everything that is looked at in a compaction test, in the order in which equals are told. */
 export const curveRules = [
-  pastLine, missesPoints, outlier, notBracketed, curvePastLine, tooFewPoints, gap, standsAbove, repeatedPoints, gravityImplausible, gravityAssumed,
+  pastLine, missesPoints, outlier, tinsDiffer, notBracketed, curvePastLine, reportedElsewhere, saturationAtOptimum, influentialPoint, tooFewPoints, gap,
+  standsAbove, curvesDisagree, wetLeg, repeatedPoints, highestPointReported, reportingPrecision, gravityImplausible, gravityAssumed,
 ] as const;

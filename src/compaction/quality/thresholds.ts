@@ -20,3 +20,21 @@ export const OUTLIER_CHANCE = 0.01;
 
 /** Specific gravities of most inorganic soils lie well inside: 2.60 to 2.80, lateritic to 3.0; organic from 2.4 (handbook of geotechnical design tables). */
 export const PLAUSIBLE_GRAVITY = { low: 2.4, high: 3.0 } as const;
+
+/**
+ * Degree of saturation at the optimum, percent: textbooks give 80 to 90; tropical soils 81.2 to 96.5 (JETS 55(3), 2023).
+ * The bands by grain are common practice, no published source; where the grain is not told, both together.
+ */
+export const SATURATION_AT_OPTIMUM = { fine: { low: 78, high: 96 }, granular: { low: 65, high: 92 }, untold: { low: 65, high: 96 } } as const;
+
+/** Air voids along the wet leg, percent: it runs near parallel to the zero-air-voids line. Common practice, no published source. */
+export const WET_LEG = { mostAir: 5, change: 2.5 } as const;
+
+/** Peaks of curves that do as well may differ by this before it is told: one step of the coarser reporting habits (practice of BS 1377-4: 0.01 Mg/m³ and half a point). */
+export const CURVES_APART = { dryDensityShare: 0.005, water: 0.5 } as const;
+
+/** Two tins of one point may differ by the greater of half a point and this share of the water content. Common practice, no published source. */
+export const TINS_APART = { points: 0.5, share: 0.05 } as const;
+
+/** Distance in its own doubts beyond which a point of a small test is stray: the chance of a good one is 1 in 1000. Common practice. */
+export const STRAY = 3.29;

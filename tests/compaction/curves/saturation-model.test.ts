@@ -38,7 +38,7 @@ test("the points of two hundred seeded curves give their curves back to one part
   for (let k = 0; k < 200; k++) {
     const one = { mostSaturation: uniform(0.82, 0.98), waterThere: uniform(14, 22), sharpness: uniform(2, 8), dryShape: uniform(0.15, 0.65) }, gs = uniform(2.6, 2.8);
     const waters = Array.from({ length: 8 }, (_, i) => one.waterThere * (0.5 + 0.1 * i)), dries = waters.map((w) => saturationCurve(w, one, gs, WATER));
-    const fit = fitSaturation(waters, dries, gs, WATER);
+    const fit = fitSaturation({ waters, dries, specificGravity: gs, waterDensity: WATER });
     expect(fit.converged).toBe(true);
     if (waters.some((w, i) => Math.abs(saturationCurve(w, fit.shape, gs, WATER) / dries[i]! - 1) > 1e-6)) wrong.push(k);
   }

@@ -112,7 +112,7 @@ describe("writing", () => {
     const { book, controller, said } = await open();
     await controller.write("", PEAK_BLOCK);
     expect(book.holds("Lab", 2, 4)).toBe('=TAMP.PEAKFIT(B4:B7,C4:C7,"auto",B1,"Mg/m3")');
-    expect(said()).toBe("Wrote E3:H12. The figures follow the readings.");
+    expect(said()).toBe("Wrote E3:H15. The figures follow the readings.");
   });
   test("filled cells are named and asked about, and only those are replaced", async () => {
     const rows = LAB.map((row) => [...row]);
