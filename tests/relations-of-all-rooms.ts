@@ -1,9 +1,11 @@
 import * as borrow from "../src/earthwork/borrow";
 import * as states from "../src/earthwork/states";
 import * as water from "../src/earthwork/water";
+import * as correlations from "../src/compaction/correlations";
 import * as effort from "../src/compaction/effort";
 import * as mould from "../src/compaction/mould";
 import * as oversize from "../src/compaction/oversize";
+import * as rapidMethod from "../src/compaction/rapid-method";
 import * as relativeCompaction from "../src/field/relative-compaction";
 import * as sandReplacement from "../src/field/sand-replacement";
 import * as density from "../src/phase/density";
@@ -19,7 +21,7 @@ export type AnyRelation = Relation<QuantityId, QuantityId>;
 const isRelation = (value: unknown): value is AnyRelation => typeof value === "object" && value !== null && "formula" in value && "solvedFor" in value;
 
 /** Every relation of the project by its exported name. A room that is added must be listed here; the architecture test looks for strays. */
-export const relationRooms = { borrow, states, water, effort, mould, oversize, relativeCompaction, sandReplacement, density, lines, voids, waterContent, waterDensity };
+export const relationRooms = { borrow, states, water, correlations, rapidMethod, effort, mould, oversize, relativeCompaction, sandReplacement, density, lines, voids, waterContent, waterDensity };
 
 export const allRelations: readonly (readonly [string, AnyRelation])[] = Object.values(relationRooms)
   .flatMap((room) => Object.entries(room as Record<string, unknown>))

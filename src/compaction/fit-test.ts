@@ -10,7 +10,7 @@ import { outlier } from "./quality/outlier";
 import type { CurveSubject } from "./quality/subject";
 import { FOLLOWS } from "./quality/thresholds";
 import { curveScatter, USUAL_SCATTER, type Scatter } from "./scatter";
-import { tooLittle, whyNoPeak } from "./shape";
+import { notOnePeak, tooLittle, whyNoPeak } from "./shape";
 import { joinedInterval, othersThan, TELLING, weighCurves, type Weighing } from "./weighing";
 
 /**
@@ -30,7 +30,7 @@ function fitAsAsked(test: CompactionTest, curve: Curve, options: FitOptions): Fi
   if (typeof found === "object") return { ok: true, fit: finish(test, options, found, weighCurves(test, options, found), "as asked for") };
   if (found === "not-enough" && curve.id === "saturation" && test.specificGravity === undefined)
     return refuse(test, options, { why: "needs-gravity", says: "the saturation curve is bounded by the zero-air-voids line: give the specific gravity of the soil." });
-  if (found === "no-peak" || curve.id === "top three" || curve.id === "smooth") return refuse(test, options, whyNoPeak(test, opensUpward(test)));
+  if (found === "no-peak" || curve.id === "top three" || curve.id === "smooth") return refuse(test, options, whyNoPeak(test, opensUpward(test), options.scatter));
   return refuse(test, options, { why: "too-few-points", says: `a ${curveName(curve.id)} needs ${curve.needs}; there are ${distinctWaters(test)}.` });
 }
 
@@ -47,7 +47,7 @@ function fitByWeighing(test: CompactionTest, options: FitOptions): FitOutcome {
   const weighing = weighCurves(test, options);
   if (test.waters.length === 3) {
     const found = curveOf("top three").fit(test, options);
-    if (typeof found !== "object") return refuse(test, options, whyNoPeak(test, opensUpward(test)));
+    if (typeof found !== "object") return refuse(test, options, whyNoPeak(test, opensUpward(test), options.scatter));
     return { ok: true, fit: finish(test, options, found, weighing, "with three points there is only the parabola through them, and no spare point to judge it by") };
   }
   const { admitted, left, pastLine } = weighing, scatter = curveScatter(test.dries, options.scatter);
@@ -57,10 +57,12 @@ function fitByWeighing(test: CompactionTest, options: FitOptions): FitOutcome {
   if (!best) {
     return refuse(test, options, pastLine
       ? { why: "no-curve-follows", says: `the peak of every curve lies past the zero-air-voids line for a specific gravity of ${test.specificGravity}: check the specific gravity and the readings.` }
-      : whyNoPeak(test, opensUpward(test)));
+      : whyNoPeak(test, opensUpward(test), options.scatter));
   }
   const { fitted } = best;
   if (Math.sqrt(fitted.sumOfSquares / spareOf(fitted)) > FOLLOWS * scatter) {
+    const odd = notOnePeak(test, options.scatter);
+    if (odd) return refuse(test, options, odd);
     const off = residualsOf(test, fitted).map(Math.abs), worst = off.indexOf(Math.max(...off));
     return refuse(test, options, {
       why: "no-curve-follows",

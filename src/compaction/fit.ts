@@ -93,7 +93,7 @@ export interface Fit {
 
 /** Why no curve was fitted, with what can still be said of the points. */
 export interface NoFit {
-  readonly why: "too-few-points" | "no-spread" | "valley" | "flat" | "rising" | "falling" | "no-curve-follows" | "peak-outside" | "needs-gravity";
+  readonly why: "too-few-points" | "no-spread" | "valley" | "flat" | "rising" | "falling" | "no-curve-follows" | "peak-outside" | "needs-gravity" | "not-one-peak";
   readonly says: string;
   readonly findings: readonly Finding[];
 }

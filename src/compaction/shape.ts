@@ -1,5 +1,7 @@
 import type { CompactionTest, NoFit } from "./fit";
 import { distinctWaters } from "./curves/curve";
+import { kindOfCurve } from "./kind";
+import type { Scatter } from "./scatter";
 
 type Reason = Pick<NoFit, "why" | "says">;
 
@@ -19,9 +21,21 @@ export function tooLittle(test: CompactionTest): Reason | undefined {
   return undefined;
 }
 
+/** Points with more than one peak, or with a dip on the dry side: what they are, and what to do instead of one curve. */
+export function notOnePeak(test: CompactionTest, scatter: Scatter): Reason | undefined {
+  const { waters, dries } = test, { kind, peaks, dip } = kindOfCurve(test, scatter), at = (i: number): string => figure(waters[i]!);
+  if (kind === "one and a half peaks" && peaks.length === 1 && dip !== null)
+    return { why: "not-one-peak", says: `dry density falls from the dry end to a dip at ${at(dip)} % and rises to ${figure(dries[peaks[0]!]!)} at ${at(peaks[0]!)} %, one and a half peaks. Clean sand bulks so: judge it by relative density (minimum and maximum density). For another soil ask for "top three", which rests on the points about the wet peak.` };
+  if (kind === "two peaks")
+    return { why: "not-one-peak", says: `the points have two peaks${peaks.length > 1 ? `, at ${at(peaks[0]!)} and ${at(peaks[1]!)} %` : ""}${dip === null ? "" : `, with a dip at ${at(dip)} % between them`}: one curve cannot follow both. Repeat the points at the dip; where they stand, report both peaks ("top three" follows the higher).` };
+  return undefined;
+}
+
 /** Why no peak stands inside the data, from the look of the points. */
-export function whyNoPeak(test: CompactionTest, opensUpward: boolean): Reason {
+export function whyNoPeak(test: CompactionTest, opensUpward: boolean, scatter: Scatter): Reason {
   const { waters, dries } = test;
+  const odd = notOnePeak(test, scatter);
+  if (odd) return odd;
   const order = waters.map((_, i) => i).sort((a, b) => waters[a]! - waters[b]!);
   const driest = order[0]!, wettest = order[order.length - 1]!;
   const most = Math.max(...dries);

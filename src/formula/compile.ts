@@ -15,6 +15,10 @@ export function compile(formula: Formula, order: readonly string[]): (...inputs:
         if (place < 0) throw new Error(`no input is called ${node.name}`);
         return (inputs) => inputs[place]!;
       }
+      case "call": {
+        const of = build(node.of);
+        return node.name === "exp" ? (x) => Math.exp(of(x)) : (x) => Math.log10(of(x));
+      }
       default: {
         const left = build(node.left), right = build(node.right);
         switch (node.op) {

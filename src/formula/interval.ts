@@ -22,6 +22,8 @@ export const intervals: World<Interval> = {
       }
     }
   },
+  // both only rise
+  call: (name, { low, high }) => name === "exp" ? { low: Math.exp(low), high: Math.exp(high) } : { low: Math.log10(low), high: Math.log10(high) },
 };
 
 export type Box = Readonly<Record<string, Interval>>;

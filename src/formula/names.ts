@@ -5,7 +5,7 @@
 type Separator = " " | "+" | "-" | "*" | "/" | "^" | "(" | ")" | ",";
 type NumberStart = "0" | "1" | "2" | "3" | "4" | "5" | "6" | "7" | "8" | "9" | ".";
 
-type Keep<Word extends string> = Word extends "" | `${NumberStart}${string}` ? never : Word;
+type Keep<Word extends string> = Word extends "" | "log10" | "exp" | `${NumberStart}${string}` ? never : Word;
 
 type Scan<Text extends string, Word extends string, Found extends string> =
   Text extends `${infer Letter}${infer Rest}`

@@ -2,7 +2,12 @@
 export type Formula =
   | { readonly op: "number"; readonly value: number }
   | { readonly op: "name"; readonly name: string }
+  | { readonly op: "call"; readonly name: Call; readonly of: Formula }
   | { readonly op: Operator; readonly left: Formula; readonly right: Formula };
+
+/** Functions of one number that a formula may use; the type of names (names.ts) passes them over. */
+export const calls = ["log10", "exp"] as const;
+export type Call = (typeof calls)[number];
 
 export type Operator = "+" | "-" | "*" | "/" | "^";
 
@@ -12,7 +17,7 @@ const TOKEN = /\d+\.?\d*(?:e[+-]?\d+)?|[A-Za-z]\w*|\S/g;
 const isOperator = (token: string | undefined): token is Operator => token !== undefined && token in BINDING;
 
 /**
- * Reads a formula text of `+ - * / ^`, brackets, numbers and names.
+ * Reads a formula text of `+ - * / ^`, brackets, numbers, names, log10(…) and exp(…).
  * @throws SyntaxError naming the token that does not fit; a formula text is a programmer's, never a user's.
  */
 export function parse(text: string): Formula {
@@ -32,6 +37,13 @@ export function parse(text: string): Formula {
       return inner;
     }
     if (/^\d/.test(token)) return { op: "number", value: Number(token) };
+    const call = calls.find((name) => name === token);
+    if (call) {
+      if (tokens[at++] !== "(") fail(`${call} needs a bracket`);
+      const of = expression(0);
+      if (tokens[at++] !== ")") fail("missing )");
+      return { op: "call", name: call, of };
+    }
     if (/^[A-Za-z]/.test(token)) return { op: "name", name: token };
     return fail(`unexpected ${token}`);
   }
@@ -56,6 +68,7 @@ export function namesIn(formula: Formula): string[] {
   switch (formula.op) {
     case "number": return [];
     case "name": return [formula.name];
+    case "call": return namesIn(formula.of);
     default: return [...new Set([...namesIn(formula.left), ...namesIn(formula.right)])];
   }
 }

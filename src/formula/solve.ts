@@ -5,6 +5,7 @@ function count(formula: Formula, name: string): number {
   switch (formula.op) {
     case "number": return 0;
     case "name": return formula.name === name ? 1 : 0;
+    case "call": return count(formula.of, name);
     default: return count(formula.left, name) + count(formula.right, name);
   }
 }
@@ -21,7 +22,7 @@ export function solveFor(formula: Formula, name: string, result: string): Formul
   let inside = formula;
   let answer: Formula = { op: "name", name: result };
   while (inside.op !== "name") {
-    if (inside.op === "number" || inside.op === "^") throw new Error(`cannot solve through ${inside.op}`);
+    if (inside.op === "number" || inside.op === "^" || inside.op === "call") throw new Error(`cannot solve through ${inside.op}`);
     const onLeft = count(inside.left, name) === 1;
     const other = onLeft ? inside.right : inside.left;
     switch (inside.op) {

@@ -1,15 +1,17 @@
-import type { Formula, Operator } from "./parse";
+import type { Call, Formula, Operator } from "./parse";
 
 /** What a formula can be read in: numbers, closed intervals, or a value with its slope. */
 export interface World<T> {
   number(value: number): T;
   operate(op: Operator, left: T, right: T): T;
+  call(name: Call, of: T): T;
 }
 
 export function evaluate<T>(formula: Formula, world: World<T>, valueOf: (name: string) => T): T {
   switch (formula.op) {
     case "number": return world.number(formula.value);
     case "name": return valueOf(formula.name);
+    case "call": return world.call(formula.name, evaluate(formula.of, world, valueOf));
     default: return world.operate(formula.op, evaluate(formula.left, world, valueOf), evaluate(formula.right, world, valueOf));
   }
 }
@@ -25,6 +27,7 @@ export const numbers: World<number> = {
       case "^": return left ** right;
     }
   },
+  call: (name, of) => name === "exp" ? Math.exp(of) : Math.log10(of),
 };
 
 /** A value and its derivative with respect to one chosen input. */
@@ -48,6 +51,10 @@ export function slopes<T>(world: World<T>): World<Slope<T>> {
           return { value, slope: times(times(right.value, lower), left.slope) };
         }
       }
+    },
+    call(name, of) {
+      const value = world.call(name, of.value);
+      return { value, slope: name === "exp" ? times(value, of.slope) : world.operate("/", of.slope, times(of.value, world.number(Math.LN10))) };
     },
   };
 }

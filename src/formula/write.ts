@@ -12,6 +12,7 @@ export function write(formula: Formula, leaf: (name: string) => string, signs: "
     switch (node.op) {
       case "number": return String(node.value);
       case "name": return leaf(node.name);
+      case "call": return `${node.name}(${go(node.of, 0)})`;
       default: {
         const own = BINDING[node.op];
         // a - (b - c) and a / (b / c) need their brackets on the right; (a ^ b) ^ c needs them on the left

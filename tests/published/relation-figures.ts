@@ -1,3 +1,5 @@
+import { gainAtEffort, optimumAtEffort, optimumFromPlasticLimit, standardOptimumFromPlasticLimit, standardUnitWeightFromPlasticLimit, unitWeightFromOptimum } from "../../src/compaction/correlations";
+import { convertedWetDensity, gapOfRapidMethod } from "../../src/compaction/rapid-method";
 import { compactiveEffort } from "../../src/compaction/effort";
 import { mouldVolumeFromMeasures, waterForBatch, wetDensityInMould } from "../../src/compaction/mould";
 import { fineDryDensity, fineWater, wholeDryDensity, wholeWater } from "../../src/compaction/oversize";
@@ -118,6 +120,18 @@ export const figures: readonly Figure[] = [
   { relation: as(shrinkOfFill), inputs: { bankDryDensity: 0.9, fillDryDensity: 1 }, says: "11.1", source: "the same: compacted to bank 1.11" },
   { relation: as(looseLift), inputs: { thickness: 1, fillDryDensity: 1 / 0.9, looseDryDensity: 1 / 1.25 }, says: "1.39", source: "FM 5-434: common earth, compacted to loose 1.39 from its 1.25 and 0.90" },
   { relation: as(bulkingOfSand), inputs: { moistDryDensity: 160, looseDryDensity: 200 }, says: "25.0", source: "IS 2386-3 example: 200 mm moist, 160 mm flooded" },
+  ...([[20, "1.9950", "1.9551", -2], [0, "2.0496", "2.0906", 2]] as const).map(([, says, wetDensity, addedWaterShare]) => ({
+    relation: as(convertedWetDensity), inputs: { wetDensity: Number(wetDensity), addedWaterShare }, says, source: "exact rapid-method check made for the purpose: true curve 1.80 - 0.0035 (w - 15.5)^2, fill at 14 %; derived" })),
+  { relation: as(gapOfRapidMethod), inputs: { peakAddedWater: 1.31579, waterContent: 14 }, says: "-1.500", source: "the same: the optimum is 1.50 points wetter than the fill" },
+  { relation: as(optimumFromPlasticLimit), inputs: { plasticLimit: 22, compactiveEffort: 2700 }, says: "14.2", source: "Gurtug and Sridharan (2004), PL 22, modified; recomputed", within: 0.03 },
+  ...([[480, "30.7", "12.93"], [600, "29.5", "13.22"], [720, "28.5", "13.46"], [1200, "25.7", "14.16"]] as const).flatMap(([compactiveEffort, says, weight]) => [
+    { relation: as(optimumFromPlasticLimit), inputs: { plasticLimit: 33, compactiveEffort }, says, source: "Gurtug and Sridharan (2004), PL 33 by blows; recomputed" },
+    { relation: as(unitWeightFromOptimum), inputs: { optimumWater: Number(says) }, says: weight, source: "Gurtug and Sridharan (2004), PL 33 by blows; recomputed", within: 0.011 },
+  ]),
+  { relation: as(standardOptimumFromPlasticLimit), inputs: { plasticLimit: 20 }, says: "18.4", source: "Sridharan and Nagaraj (2005), PL 20; recomputed" },
+  { relation: as(standardUnitWeightFromPlasticLimit), inputs: { plasticLimit: 20 }, says: "16.86", source: "Sridharan and Nagaraj (2005), PL 20; recomputed" },
+  { relation: as(optimumAtEffort), inputs: { optimumWater: 20, liquidLimit: 45, compactiveEffort: 592.5, otherEffort: 2693.3 }, says: "14.87", source: "Blotz and others (1998), LL 45, standard to modified: -5.1 points; derived to two digits" },
+  { relation: as(gainAtEffort), inputs: { liquidLimit: 45, compactiveEffort: 592.5, otherEffort: 2693.3 }, says: "1.85", source: "Blotz and others (1998), LL 45, standard to modified: +1.85 kN/m3" },
   { relation: as(waterGap), inputs: { waterContent: 13.7, optimumWater: 12.5 }, says: "1.2", source: `${text9}, problems 6.4 and 6.5: field water against the water content of the highest point` },
   { relation: as(waterNeedLitres), inputs: { volume: 1, dryDensity: 1.8, waterContent: 10, targetWater: 11 }, says: "18", source: "18 L per m3 for 1.8 t/m3 and one point: common practice, no published source" },
   { relation: as(waterNeedLitres), inputs: { volume: 960000, dryDensity: 1.85, waterContent: 8, targetWater: 11.6 }, says: "63936000", source: "published problem: 960 000 m3, 3.6 points at 1.85 t/m3 give 63 936 m3 of water" },

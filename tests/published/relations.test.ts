@@ -21,6 +21,11 @@ function* spoilings(formula: Formula): Generator<Formula> {
       yield { ...formula, value: formula.value * 1.01 };
       yield { ...formula, value: -formula.value };
       return;
+    case "call":
+      yield formula.of;
+      yield { ...formula, name: formula.name === "exp" ? "log10" : "exp" };
+      for (const of of spoilings(formula.of)) yield { ...formula, of };
+      return;
     default:
       yield { ...formula, op: OTHER[formula.op] };
       yield { ...formula, left: formula.right, right: formula.left };

@@ -2,6 +2,7 @@ import { curvePastLine } from "./curve-past-line";
 import { curvesDisagree } from "./curves-disagree";
 import { gap } from "./gap";
 import { influentialPoint } from "./influential-point";
+import { kindOfCurveRule } from "./kind-of-curve";
 import { missesPoints } from "./misses-points";
 import { notBracketed } from "./not-bracketed";
 import { outlier } from "./outlier";
@@ -17,6 +18,6 @@ import { wetLeg } from "./wet-leg";
 
 /** Everything that is looked at in a compaction test, in the order in which equals are told. */
 export const curveRules = [
-  pastLine, missesPoints, outlier, tinsDiffer, notBracketed, curvePastLine, reportedElsewhere, saturationAtOptimum, influentialPoint, tooFewPoints, gap,
+  pastLine, missesPoints, kindOfCurveRule, outlier, tinsDiffer, notBracketed, curvePastLine, reportedElsewhere, saturationAtOptimum, influentialPoint, tooFewPoints, gap,
   standsAbove, curvesDisagree, wetLeg, repeatedPoints, highestPointReported, reportingPrecision, gravityImplausible, gravityAssumed,
 ] as const;

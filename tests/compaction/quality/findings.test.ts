@@ -66,6 +66,13 @@ const cases: Readonly<Record<string, { fires: readonly Case[]; silent: readonly 
     fires: [{ test: of([9, 10.5, 12, 13.5, 15, 17], [1.8, 1.829, 1.833, 1.841, 1.829, 1.769]), places: ["whole"], says: /parabola 1\.84\d at 12\.5 %; cubic 1\.84\d at 13\.1 %/ }],
     silent: [{ test: good }, { test: publishedTest("P") }, { test: publishedTest("A") }],
   },
+  "kind-of-curve": {
+    fires: [
+      { test: of([4, 6, 8, 10, 12, 14, 16], [1.70, 1.64, 1.62, 1.65, 1.70, 1.74, 1.71]), curve: "top three", places: ["whole"], says: /falls from the dry end to a dip at 8 % and rises to 1\.74 at 14 %.* relative density/ },
+      { test: of([8, 10, 12, 14, 16], [1.6, 1.7, 1.64, 1.72, 1.66]), curve: "top three", places: ["whole"], says: /two peaks, at 10 and 14 %, with a dip at 12 %/ },
+    ],
+    silent: [{ test: good }, { test: publishedTest("E"), curve: "parabola" }, { test: publishedTest("R"), curve: "parabola" }],
+  },
   "tins-differ": {
     fires: [
       { test: { ...good, tins: [[9.9, 10.1], [11.2, 12.8], [14], [16.1, 15.9], [18, 18]] }, places: [1], says: /11\.2 and 12\.8 %, 1\.6 points apart: more than 0\.6/ },
