@@ -34,10 +34,10 @@ export function blowWork(rammerMass: any[][], drop: any[][], blows: any[][], lay
  * @customfunction PEAKFIT
  * @param waters Water contents of the points, percent of dry mass. One column or one row.
  * @param dries Dry densities of the points, a range of the same shape.
- * @param [curve] Curve to fit: "auto", "parabola", "cubic" or "top three". Left out: "auto".
+ * @param [curve] Curve to fit: "auto", "parabola", "cubic", "quartic", "saturation" (needs gs), "top three" or "smooth". Left out: "auto".
  * @param [gs] Specific gravity of the solids; needed for saturation, air voids and the zero-air-voids line.
  * @param [waterDensity] Density of water in the unit of the dry densities, or that unit as text, such as "lb/ft3". Left out: "Mg/m3".
- * @returns A block of ten rows and four columns.
+ * @returns A block of thirteen rows and four columns.
  */
 export function peakFit(waters: any[][], dries: any[][], curve?: any[][], gs?: any[][], waterDensity?: any[][]): any[][] {
   return reply(() => peakBlock({ waters: cells(waters), dries: cells(dries), curve: cells(curve), gs: cells(gs), water: cells(waterDensity) }));
@@ -48,7 +48,7 @@ export function peakFit(waters: any[][], dries: any[][], curve?: any[][], gs?: a
  * @customfunction PEAKDRY
  * @param waters Water contents of the points, percent of dry mass. One column or one row.
  * @param dries Dry densities of the points, a range of the same shape.
- * @param [curve] Curve to fit: "auto", "parabola", "cubic" or "top three". Left out: "auto".
+ * @param [curve] Curve to fit: "auto", "parabola", "cubic", "quartic", "saturation" (needs gs), "top three" or "smooth". Left out: "auto".
  * @param [gs] Specific gravity of the solids.
  * @param [waterDensity] Density of water in the unit of the dry densities, or that unit as text, such as "lb/ft3". Left out: "Mg/m3".
  * @returns Maximum dry density, in the unit of the dry densities.
@@ -62,7 +62,7 @@ export function peakDryDensity(waters: any[][], dries: any[][], curve?: any[][],
  * @customfunction PEAKWATER
  * @param waters Water contents of the points, percent of dry mass. One column or one row.
  * @param dries Dry densities of the points, a range of the same shape.
- * @param [curve] Curve to fit: "auto", "parabola", "cubic" or "top three". Left out: "auto".
+ * @param [curve] Curve to fit: "auto", "parabola", "cubic", "quartic", "saturation" (needs gs), "top three" or "smooth". Left out: "auto".
  * @param [gs] Specific gravity of the solids.
  * @param [waterDensity] Density of water in the unit of the dry densities, or that unit as text, such as "lb/ft3". Left out: "Mg/m3".
  * @returns Optimum water content, percent of dry mass.
@@ -77,7 +77,7 @@ export function peakWaterContent(waters: any[][], dries: any[][], curve?: any[][
  * @param at Water content at which the curve is wanted, percent. A cell, a row or a column.
  * @param waters Water contents of the points, percent of dry mass. One column or one row.
  * @param dries Dry densities of the points, a range of the same shape.
- * @param [curve] Curve to fit: "auto", "parabola", "cubic" or "top three". Left out: "auto".
+ * @param [curve] Curve to fit: "auto", "parabola", "cubic", "quartic", "saturation" (needs gs), "top three" or "smooth". Left out: "auto".
  * @param [gs] Specific gravity of the solids.
  * @param [waterDensity] Density of water in the unit of the dry densities, or that unit as text, such as "lb/ft3". Left out: "Mg/m3".
  * @returns Dry density on the curve, in the unit of the dry densities.
@@ -91,7 +91,7 @@ export function curveDryDensity(at: any[][], waters: any[][], dries: any[][], cu
  * @customfunction CURVEFLAGS
  * @param waters Water contents of the points, percent of dry mass. One column or one row.
  * @param dries Dry densities of the points, a range of the same shape.
- * @param [curve] Curve to fit: "auto", "parabola", "cubic" or "top three". Left out: "auto".
+ * @param [curve] Curve to fit: "auto", "parabola", "cubic", "quartic", "saturation" (needs gs), "top three" or "smooth". Left out: "auto".
  * @param [gs] Specific gravity of the solids; without it no point can be held against the zero-air-voids line.
  * @param [waterDensity] Density of water in the unit of the dry densities, or that unit as text, such as "lb/ft3". Left out: "Mg/m3".
  * @returns Rows of: where, what, why.

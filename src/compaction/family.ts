@@ -74,9 +74,12 @@ function nearest(above: readonly Above[]): { peak: PeakPlace; curves: string[] }
   return { peak: best.peak, curves: [best.id] };
 }
 
+/** A point this near to a curve, as a share of its density, lies on it: well inside the scatter of a point. Common practice, no published source. */
+const ON = 0.0005;
+
 function between(above: readonly Above[]): { peak: PeakPlace; curves: string[] } | null {
-  const on = above.find(({ by }) => by === 0);
-  if (on) return { peak: on.peak, curves: [on.id] };
+  const close = nearest(above), by = above.find(({ id }) => id === close.curves[0])!.by;
+  if (Math.abs(by) <= ON * close.peak.dry) return close;
   // the curves stand by density: the point is above the lighter and below the heavier of the two it lies between
   for (let i = 1; i < above.length; i++) {
     const lighter = above[i - 1]!, heavier = above[i]!;

@@ -1,75 +1,20 @@
 import { compactiveEffort } from "../compaction/effort";
-import { curveName, curveWords, type CompactionTest, type CurveWord, type Fit, type FitOutcome, type NoFit, type PeakFigure } from "../compaction/fit";
-import { fitTest } from "../compaction/fit-test";
+import { curveName, type Fit, type PeakFigure } from "../compaction/fit";
 import { mouldVolumeFromMeasures, waterForBatch, wetDensityInMould } from "../compaction/mould";
 import { fineDryDensity, fineWater, wholeDryDensity, wholeWater } from "../compaction/oversize";
 import type { Finding } from "../findings/finding";
 import { densityUnit, densityUnits, SOIL_OVER_WATER } from "../units/density-units";
 import { massUnits, volumeUnits, type MassUnit, type VolumeUnit } from "../units/mass-and-volume-units";
 import { WATER_KG_M3_AT_20 } from "../units/water-density";
-import { CellError, isLeftOut, isRange, notEnough, refusal, type Block, type Cell } from "./cell";
+import { CellError, isLeftOut, refusal, type Block, type Cell } from "./cell";
 import { argument, column } from "./column";
-import { once } from "./once";
-import { readPairs } from "./pairs";
-import { numberOf, unitOfMass, unitOfVolume, waterDensity, wordOf, type Reader } from "./readers";
+import { fitOnce, fitted, readTest, sentence, type TestCells } from "./compaction-test";
+import { numberOf, unitOfMass, unitOfVolume } from "./readers";
 import { relationColumn } from "./relation-column";
-import { unitGuard } from "./unit-guard";
 
 type Cells = Block | null;
 
-/** The arguments that every function on a whole test shares. */
-export interface TestCells { readonly waters: Cells; readonly dries: Cells; readonly curve: Cells; readonly gs: Cells; readonly water: Cells }
-
-interface ReadTest { readonly test: CompactionTest; readonly word: CurveWord; readonly rows: readonly number[] }
-
-const curveReader = wordOf("curve", curveWords, "auto");
-
-/** One value where a range would make no sense. */
-function single<T>(reader: Reader<T>, block: Cells): T | CellError | undefined {
-  if (isLeftOut(block)) return reader.leftOut;
-  return isRange(block!) ? refusal(`${reader.name}: give one cell, not a range.`) : reader.check?.(block!) ?? reader.read(block![0]![0]);
-}
-
-function readTest({ waters, dries, curve, gs, water }: TestCells): ReadTest | CellError {
-  if (isLeftOut(waters)) return refusal("give the water contents of the points.");
-  if (isLeftOut(dries)) return refusal("give the dry densities of the points.");
-  const pairs = readPairs("waterContent", waters!, "dryDensity", dries!);
-  if (pairs instanceof CellError) return pairs;
-  const word = single(curveReader, curve), specificGravity = single(numberOf("specificGravity"), gs), density = single(waterDensity, water);
-  for (const read of [word, specificGravity, density]) if (read instanceof CellError) return read;
-  // the density of water enters with the specific gravity, or where it is given; else the fit holds in any unit
-  if (!isLeftOut(gs) || !isLeftOut(water)) {
-    for (const [i, dry] of pairs.second.entries()) {
-      const trouble = unitGuard(dry, density as number, `row ${pairs.rows[i]} of the ranges: `);
-      if (trouble) return trouble;
-    }
-  }
-  const most = Math.max(...pairs.second), least = Math.min(...pairs.second);
-  const odd = most > UNIT_MIX * least ? pairs.second.findIndex((dry) => dry === most || dry === least) : -1;
-  if (odd >= 0) return refusal(`the dry densities run from ${least} (row ${pairs.rows[pairs.second.indexOf(least)]} of the ranges) to ${most} (row ${pairs.rows[pairs.second.indexOf(most)]}): they cannot be in one unit.`);
-  return {
-    test: { waters: pairs.first, dries: pairs.second, specificGravity: specificGravity as number | undefined, waterDensity: density as number },
-    word: word as CurveWord,
-    rows: pairs.rows,
-  };
-}
-
-/** No soil's densest point is this many times its loosest in one test; two units are mixed. Common practice, no published source. */
-const UNIT_MIX = 3;
-
-const fitOnce = once((test: CompactionTest, word: CurveWord): FitOutcome => fitTest(test, word));
-
-const errorOf = ({ why, says }: NoFit): CellError => why === "too-few-points" || why === "no-spread" ? notEnough(sentence(says)) : refusal(sentence(says));
-const sentence = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
-
-function fitted(cells: TestCells): { fit: Fit; rows: readonly number[] } | CellError {
-  const read = readTest(cells);
-  if (read instanceof CellError) return read;
-  const outcome = fitOnce(read.test, read.word);
-  return outcome.ok ? { fit: outcome.fit, rows: read.rows } : errorOf(outcome.noFit);
-}
-
-const NOT_BOUNDED = "not bounded";
+export const NOT_BOUNDED = "not bounded";
 
 /** The labelled block of PEAKFIT. Cells elsewhere refer to its rows, so their order is kept. */
 export function peakBlock(cells: TestCells): Cell[][] | CellError {

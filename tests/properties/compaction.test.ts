@@ -13,7 +13,7 @@ const laboratoryTest = fc.record({
   const waters = Array.from({ length: count }, (_, i) => optimum + step * (i - (count - 1) / 2 + shift));
   return { waters, dries: waters.map((w, i) => most - drop * (w - optimum) ** 2 + scatter[i]! * most) };
 });
-const curve = fc.constantFrom("auto", "parabola", "cubic", "top three");
+const curve = fc.constantFrom("auto", "parabola", "cubic", "quartic", "top three", "smooth");
 
 const peak = (waters: readonly number[], dries: readonly number[], ...more: unknown[]): unknown[][] | null => {
   try {
@@ -97,4 +97,81 @@ test("a test without scatter gives its parabola back, in every curve", () => {
     }
   }), { numRuns: 100, seed: 34 });
   expect(met).toBeGreaterThan(200);
+});
+
+test("PEAKTABLE says of every test what PEAKFIT says of it alone, in whatever order they stand", () => {
+  let met = 0;
+  fc.assert(fc.property(fc.array(laboratoryTest, { minLength: 1, maxLength: 4 }), curve, fc.integer({ min: 0, max: 1000 }), (tests, word, seed) => {
+    const points = tests.flatMap(({ waters, dries }, t) => waters.map((water, i) => ({ id: `T${t}`, water, dry: dries[i]! }))).sort((a, b) => ((a.water * 7919 + seed) % 13) - ((b.water * 7919 + seed) % 13));
+    const table = call("PEAKTABLE", column(points.map(({ id }) => id) as never), column(points.map(({ water }) => water)), column(points.map(({ dry }) => dry)), word);
+    for (const row of table.slice(1)) {
+      const own = points.filter(({ id }) => id === row[0]), alone = peak(own.map(({ water }) => water), own.map(({ dry }) => dry), word);
+      expect(row[7] === "no curve").toBe(alone === null);
+      if (!alone) continue;
+      met++;
+      expect(row.slice(1, 7)).toEqual([...alone[1]!.slice(1), ...alone[2]!.slice(1)]);
+    }
+  }), { numRuns: 100, seed: 35 });
+  expect(met).toBeGreaterThan(100);
+});
+
+test("the span of water at a percent lies about the optimum, inside the data, and narrows as the percent rises", () => {
+  let met = 0;
+  fc.assert(fc.property(laboratoryTest, fc.double({ min: 90, max: 99.8, noNaN: true }), ({ waters, dries }, percent) => {
+    const block = peak(waters, dries);
+    if (!block) return;
+    const [low, high] = call("WATERSPAN", column(waters), column(dries), percent)[0] as (number | string)[], [nearLow, nearHigh] = call("WATERSPAN", column(waters), column(dries), (percent + 100) / 2)[0] as (number | string)[];
+    for (const [side, near, far] of [[-1, nearLow, low], [1, nearHigh, high]] as const) {
+      if (typeof far !== "number") continue;
+      met++;
+      expect(side * (far - (block[2]![1] as number))).toBeGreaterThan(0);
+      expect(side * (far - (near as number))).toBeGreaterThanOrEqual(0);
+      close(call("CURVEDRY", [[far]], column(waters), column(dries))[0]![0], (block[1]![1] as number) * percent / 100, 1e-7);
+    }
+  }), { numRuns: 300, seed: 36 });
+  expect(met).toBeGreaterThan(200);
+});
+
+test("the rapid method finds the relative compaction of any soil without its water content", () => {
+  let met = 0;
+  const soil = fc.record({ most: fc.double({ min: 1.4, max: 2.1, noNaN: true }), off: fc.double({ min: -1.2, max: 1.2, noNaN: true }), fill: fc.double({ min: 6, max: 30, noNaN: true }), field: fc.double({ min: 0.9, max: 1.02, noNaN: true }) });
+  fc.assert(fc.property(soil, ({ most, off, fill, field }) => {
+    const z = [-2, -1, 0, 1, 2], peakZ = off;
+    // converted wet density a parabola of the added water: then the method is exact
+    const converted = z.map((one) => most * (1 + fill / 100) - 0.01 * (one - peakZ) ** 2), wet = converted.map((one, i) => one * (1 + z[i]! / 100));
+    const block = call("RAPIDPEAK", column(z), column(wet), field * most * (1 + fill / 100), fill);
+    close(block[0]![1], 100 * field, 1e-9);
+    expect(Math.abs((block[2]![1] as number) - peakZ)).toBeLessThan(1e-7);
+    expect(Math.abs((block[4]![1] as number) + peakZ * (1 + fill / 100))).toBeLessThan(1e-6);
+    expect(call("RAPIDPEAK", column(z), column(wet), field * most * (1 + fill / 100))[0]![1]).toBe(block[0]![1]);
+    met++;
+  }), { numRuns: 200, seed: 37 });
+  expect(met).toBe(200);
+});
+
+test("a point on a curve of a family picks that curve, and one between two a peak between theirs", () => {
+  let met = 0;
+  fc.assert(fc.property(fc.double({ min: 0, max: 1, noNaN: true }), fc.double({ min: 0.86, max: 0.97, noNaN: true }), (share, wet) => {
+    const curves = [{ id: "x", w: 18, d: 1.7 }, { id: "y", w: 16, d: 1.78 }, { id: "z", w: 14, d: 1.86 }];
+    const family = curves.flatMap(({ id, w, d }) => [-5, -2.5, 0, 2.5].map((step) => [id, w + step, d - 0.004 * step * step]));
+    const at = (i: number, water: number): number => curves[i]!.d - 0.004 * (water - curves[i]!.w) ** 2, water = wet * (18 - 2 * share);
+    let block: unknown[][];
+    try { block = call("FAMILYPICK", water, at(0, water) + share * (at(1, water) - at(0, water)), family); } catch { return; }
+    met++;
+    expect(block[0]![1] as number).toBeGreaterThan(1.7 - 0.002);
+    expect(block[0]![1] as number).toBeLessThan(1.78 + 0.002);
+    expect(Math.abs((block[1]![1] as number) - (18 - 2 * share))).toBeLessThan(0.05);
+  }), { numRuns: 200, seed: 38 });
+  expect(met).toBeGreaterThan(90);
+});
+
+test("a heavier effort is expected to give more density at less water, and a plastic limit a peak that falls with it", () => {
+  fc.assert(fc.property(fc.double({ min: 300, max: 2000, noNaN: true }), fc.double({ min: 1.1, max: 1.9, noNaN: true }), fc.double({ min: 20, max: 70, noNaN: true }), (effort, times, limit) => {
+    const [[, dry], [, water]] = call("EFFORTPEAK", 1.7, 18, effort, effort * times, limit) as [[string, number], [string, number]];
+    expect(dry).toBeGreaterThan(1.7);
+    expect(water).toBeLessThan(18);
+    const plastic = 10 + limit / 2, [, one] = call("PLASTICPEAK", plastic) as [unknown, [string, number, number]], [, more] = call("PLASTICPEAK", plastic + 2) as [unknown, [string, number, number]];
+    expect(more[1]).toBeLessThan(one[1]);
+    expect(more[2]).toBeGreaterThan(one[2]);
+  }), { numRuns: 200, seed: 39 });
 });

@@ -1,5 +1,6 @@
 import { CellError, type Block, type Cell } from "../../src/worksheet/cell";
-import { curveDry, curveFlags, effortColumn, mouldWet, peakBlock, peakDry, peakWater, type TestCells } from "../../src/worksheet/compaction";
+import { curveDry, curveFlags, effortColumn, mouldWet, peakBlock, peakDry, peakWater } from "../../src/worksheet/compaction";
+import type { TestCells } from "../../src/worksheet/compaction-test";
 
 const down = (...values: unknown[]): Block => values.map((value) => [value]);
 const at = (value: unknown): Block => [[value]];

@@ -98,7 +98,7 @@ function summit({ x, y }: Knots, { slopes, at, slope }: Line): { water: number; 
  * about the peak takes that away (Efron and Tibshirani, section 13.4, the pivotal interval).
  */
 function reflected({ low, high }: DrawnInterval, value: number): PeakInterval {
-  return { low: high === null ? null : Math.min(value, 2 * value - high), high: low === null ? null : Math.max(value, 2 * value - low) };
+  return { low: Math.min(value, 2 * value - high!), high: Math.max(value, 2 * value - low!) };
 }
 
 function reckon({ waters, dries }: CompactionTest, line: Pick<Line, "at" | "slope">, peak: { readonly water: number; readonly dry: number }, { scatter }: FitOptions): Reckoning {
@@ -110,10 +110,13 @@ function reckon({ waters, dries }: CompactionTest, line: Pick<Line, "at" | "slop
     // the draw's densest point at an end: its peak lies beyond the data on that side
     const end = knots.y.indexOf(Math.max(...knots.y)) === 0 ? -Infinity : Infinity;
     into[0] = peak?.water ?? end;
-    into[1] = peak?.dry ?? Infinity;
+    // without a peak the density is at least that of the highest point
+    into[1] = peak?.dry ?? Math.max(...knots.y);
   }, { draws: DRAWS, seed: SEED, level: 0.95 });
   return {
-    method: "bootstrap", widening: 1, optimumWater: { low: water!.low, high: water!.high }, maxDryDensity: reflected(density!, peak.dry),
+    method: "bootstrap", widening: 1, optimumWater: { low: water!.low, high: water!.high },
+    // where the optimum may lie outside the data, so may a greater density
+    maxDryDensity: { ...reflected(density!, peak.dry), ...(water!.low === null || water!.high === null ? { high: null } : {}) },
     halfBand: (at) => 1.96 * readingDoubt(at, line.at(at), line.slope(at), scatter),
   };
 }
