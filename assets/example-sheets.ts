@@ -51,8 +51,9 @@ const start = sheet("Start here", [4, 100], 0, [0, 0, [
   [number(1, "whole"), text("Lab A: a laboratory test in SI units, points down the rows. Select A6:K12, headings and all, and look at the pane.")],
   [number(2, "whole"), text("Lab B: a test in US units, points across the columns. Select A4:F8.")],
   [number(3, "whole"), text("Lab C: a test with a reading past the zero-air-voids line. Select A4:C10 and enter 2.68 as the specific gravity.")],
-  [number(4, "whole"), text("Field: field tests against those references, and water and borrow for the next lift.")],
-  [number(5, "whole"), text("Reference: the remaining functions, one row each, for trying out.")],
+  [number(4, "whole"), text("Borrow: three tests below one another, a family of curves, the one-point and the rapid method. Select A3:C18.")],
+  [number(5, "whole"), text("Field: field tests against those references, and water and borrow for the next lift.")],
+  [number(6, "whole"), text("Reference: the remaining functions, one row each, for trying out.")],
   [],
   [null, text("Change a reading (yellow) and every figure that rests on it follows. A compaction curve holds for the soil tested, as it was tested.", "note")],
   [null, text("These figures do not replace the project specification, the local code, or the judgement of a licensed engineer.", "note")],
@@ -141,6 +142,49 @@ const labC = sheet("Lab C", [16, 15, 16, 14, 12, 3, 13, 14, 110], 5,
   ]],
 );
 
+const BORROW = [
+  ["pit 1", [[13.6, 1.621], [15.4, 1.676], [17.5, 1.702], [19.6, 1.673], [21.4, 1.602]]],
+  ["pit 2", [[10.9, 1.717], [13.1, 1.781], [15.0, 1.803], [17.2, 1.772], [18.9, 1.707]]],
+  ["pit 3", [[8.3, 1.823], [10.5, 1.887], [12.4, 1.911], [14.3, 1.886], [16.5, 1.808]]],
+] as const;
+const RAPID = [[-2, 1.955], [0, 2.043], [2, 2.091]] as const;
+const borrow = sheet("Borrow", [10, 15, 14, 3, 54, 20, 26, 12, 20, 12, 12, 14, 9, 60], 3,
+  [0, 0, [
+    [text("Borrow: three soils of one kind, light compaction", "title")],
+    [text("Invented data. The name of a test stands beside its first point; all of them are fitted at once.", "note")],
+    headings("Test", "Water content (%)", "Dry density (Mg/m³)"),
+    ...BORROW.flatMap(([name, points]) => points.map(([water, dry], i): Entry[] => [i === 0 ? text(name) : null, number(water), number(dry)])),
+  ]],
+  [2, 4, [
+    [formula('TAMP.PEAKTABLE(A4:A18,B4:B18,C4:C18,"auto",2.7)', "heading"), ...filled("heading", "heading", "heading", "heading", "heading", "heading", "heading", "heading", "heading")],
+    ...BORROW.map(() => filled("text", "thousandth", "thousandth", "thousandth", "tenth", "tenth", "tenth", "text", "whole", "text")),
+  ]],
+  [7, 4, [
+    headings("One point compacted in the field: which peak does it belong to?", "", ""),
+    [text("Water content, %"), number(14.6)], [text("Dry density, Mg/m³"), number(1.735)],
+    [formula("TAMP.FAMILYPICK(F9,F10,A4:C18)", "text"), ...filled("thousandth", "text")],
+    filled("text", "tenth"),
+  ]],
+  [16, 4, [
+    headings("Rapid method: fill of 2.000 Mg/m³ wet, at 14 % as dried later", "", ""),
+    [formula("TAMP.RAPIDPEAK(A23:A25,B23:B25,2,14)", "text"), ...filled("tenth", "text")],
+    filled("text", "tenth"), filled("text", "hundredth"), filled("text", "thousandth"), filled("text", "hundredth"),
+  ]],
+  [20, 0, [
+    headings("Water added", "Wet density"), units("% of moist", "Mg/m³"),
+    ...RAPID.map(([added, wet]): Entry[] => [number(added), number(wet)]),
+  ]],
+  [24, 4, [
+    headings("Plausibility", "", ""),
+    [text("97 % of pit 2 holds between these water contents, %"), formula('TAMP.WATERSPAN(B9:B13,C9:C13,97)', "tenth"), ...filled("tenth")],
+    [text("Shape of pit 2"), formula("TAMP.CURVEKIND(B9:B13,C9:C13,38)", "text")],
+    [formula("TAMP.EFFORTPEAK(F5,I5,595,2700,38)", "text"), ...filled("thousandth", "text")],
+    filled("text", "tenth", "text"),
+    [formula("TAMP.PLASTICPEAK(19)", "text"), ...filled("text", "text", "text")],
+    filled("text", "thousandth", "tenth", "text"), filled("text", "thousandth", "tenth", "text"),
+  ]],
+);
+
 const FIELD = [
   ["F1", "0+020", 2.047, 14.6], ["F2", "0+040", 2.012, 13.1], ["F3", "0+060", 2.061, 15.2], ["F4", "0+080", 1.969, 12.4],
   ["F5", "0+100", 2.033, 16.8], ["F6", "0+120", 2.054, 14.1],
@@ -211,4 +255,4 @@ const reference = sheet("Reference", [76, 14, 10], 3,
   ]],
 );
 
-export const exampleSheets: readonly ExampleSheet[] = [start, labA, labB, labC, field, reference];
+export const exampleSheets: readonly ExampleSheet[] = [start, labA, labB, labC, borrow, field, reference];

@@ -23,7 +23,12 @@ export function familyOf(tests: readonly { readonly id: string; readonly test: C
     const outcome = fitTest(test, word);
     if (outcome.ok) curves.push({ id, fit: outcome.fit }); else left.push({ id, says: outcome.noFit.says });
   }
-  curves.sort((a, b) => a.fit.maxDryDensity.value - b.fit.maxDryDensity.value);
+  return familyFrom(curves, left);
+}
+
+/** A family from curves that are fitted already. */
+export function familyFrom(fitted: readonly FamilyCurve[], left: Family["left"] = []): Family {
+  const curves = [...fitted].sort((a, b) => a.fit.maxDryDensity.value - b.fit.maxDryDensity.value);
   const doubts: string[] = [];
   if (curves.length < LEAST_CURVES) doubts.push(`a family needs at least ${LEAST_CURVES} curves; there ${curves.length === 1 ? "is" : "are"} ${curves.length}.`);
   for (let i = 1; i < curves.length; i++) {

@@ -248,7 +248,7 @@ class Workspace {
     let damping = previous > 0 ? previous : 1e-3, low = 0, high = Infinity;
     for (let round = 0; round < 60; round++) {
       const length = this.solve(damping, step, scale, free);
-      if (length > 0.95 * radius && length <= 1.05 * radius) break;
+      if (length > 0.9 * radius && length <= 1.1 * radius) break;
       if (length > radius) low = Math.max(low, damping); else high = Math.min(high, damping);
       // a singular Jacobian may leave even the least damped step inside the region
       if (high < 1e-30) break;

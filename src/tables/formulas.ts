@@ -51,6 +51,17 @@ export function peakFormulas(table: Table, choices: PeakChoices, fromSheet: stri
   };
 }
 
+/** The live formula of a table that holds several tests, named in one of its lines; null where its figures are not in columns of their own. */
+export function tableFormula(table: Table, namesAt: number, choices: PeakChoices, fromSheet: string): string | null {
+  const water = table.series.find(({ role }) => role === "waterContent"), dry = table.series.find(({ role }) => role === "dryDensity"), names = table.series.find(({ index }) => index === namesAt);
+  if (table.waterFrom !== "column" || table.dryFrom !== "column" || !water?.range || !dry?.range || !names) return null;
+  const prefix = fromSheet === table.area.sheet ? "" : `${sheetName(table.area.sheet)}!`;
+  // the names stand beside the points, whether every cell of theirs is filled or not
+  const across = table.orientation === "across";
+  const beside = across ? { ...water.range, row: table.area.row + namesAt } : { ...water.range, column: table.area.column + namesAt };
+  return `=TAMP.PEAKTABLE(${[prefix + rangeName(beside), asPercent(water, prefix + rangeName(water.range)), prefix + rangeName(dry.range), `"${choices.curve}"`, ...lastArguments(table, choices, prefix)].join(",")})`;
+}
+
 function lastArguments(table: Table, { specificGravity, waterDensity }: PeakChoices, prefix: string): string[] {
   if (specificGravity === null) return [];
   const cell = table.specificGravity;

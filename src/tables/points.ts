@@ -115,8 +115,9 @@ function readPoint(reading: Reading, { at, moreTins }: PointPlaces, problems: Pr
   if (!whole) return null;
   const get = (role: ReadingRole): Had[] => byRole.get(role) ?? [];
 
-  const water = reading.waterFrom === "tins" ? waterFromTins(get("wetAndTin"), get("dryAndTin"), get("tare"), problems) : get("waterContent")[0]!.value;
-  if (water === null) return null;
+  const tins = reading.waterFrom === "tins" ? watersOfTins(get("wetAndTin"), get("dryAndTin"), get("tare"), problems) : [get("waterContent")[0]!.value];
+  if (tins === null) return null;
+  const water = tins.reduce((sum, one) => sum + one, 0) / tins.length;
   const dryCells = needs.dry.flatMap((role) => get(role).map(({ cell }) => cell));
   const dry = dryDensityOf(reading, get, water);
   if (!couldBeSoil(dry, densityUnit!, WATER_KG_M3_AT_20)) {
@@ -130,7 +131,7 @@ function readPoint(reading: Reading, { at, moreTins }: PointPlaces, problems: Pr
     });
     return null;
   }
-  return { water, dry, waterCells: needs.water.flatMap((role) => get(role).map(({ cell }) => cell)), dryCells };
+  return { water, dry, tins, waterCells: needs.water.flatMap((role) => get(role).map(({ cell }) => cell)), dryCells };
 }
 
 function dryDensityOf({ dryFrom, series, densityUnit, mouldMass, mouldVolume, mouldUnits }: Reading, get: (role: ReadingRole) => Had[], water: number): number {
@@ -145,14 +146,14 @@ function dryDensityOf({ dryFrom, series, densityUnit, mouldMass, mouldVolume, mo
   return dryDensityFromWet.value({ wetDensity: wet / densityUnit!.kgM3, waterContent: water });
 }
 
-/** The mean over the tins of one point. */
-function waterFromTins(wets: readonly Had[], dries: readonly Had[], tares: readonly Had[], problems: Problem[]): number | null {
+/** The water content of each tin of one point. */
+function watersOfTins(wets: readonly Had[], dries: readonly Had[], tares: readonly Had[], problems: Problem[]): number[] | null {
   const count = Math.min(wets.length, dries.length, tares.length);
   if (wets.length !== dries.length || dries.length !== tares.length) {
     problems.push({ cell: wets[0]!.cell, says: `The tins at ${nameOf(wets[0]!.cell)} have ${wets.length} wet, ${dries.length} dry and ${tares.length} empty masses: every tin needs all three.` });
     return null;
   }
-  let sum = 0;
+  const each: number[] = [];
   for (let i = 0; i < count; i++) {
     const wet = wets[i]!, dry = dries[i]!, tare = tares[i]!;
     if (dry.value <= tare.value) {
@@ -163,9 +164,9 @@ function waterFromTins(wets: readonly Had[], dries: readonly Had[], tares: reado
       problems.push({ cell: wet.cell, says: `${nameOf(wet.cell)} (wet soil and tin, ${wet.value}) weighs less than ${nameOf(dry.cell)} after drying (${dry.value}): were the two swapped?` });
       return null;
     }
-    sum += waterContentFromMasses.value({ wetMass: wet.value, dryMass: dry.value, tare: tare.value });
+    each.push(waterContentFromMasses.value({ wetMass: wet.value, dryMass: dry.value, tare: tare.value }));
   }
-  return sum / count;
+  return each;
 }
 
 function blankBeside(reading: Reading, role: ReadingRole, cell: Place, position: number): Problem {

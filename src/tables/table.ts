@@ -32,6 +32,8 @@ export interface TablePoint {
   readonly water: number;
   /** in the table's density unit */
   readonly dry: number;
+  /** water content of each tin; one where it stands in a column */
+  readonly tins: readonly number[];
   readonly waterCells: readonly Place[];
   readonly dryCells: readonly Place[];
 }

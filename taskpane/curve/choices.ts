@@ -1,4 +1,4 @@
-import { curveWords, type CurveWord } from "../../src/compaction/fit";
+import { curveWords, soilGrains, standardIds, type CurveWord, type SoilGrain, type StandardId } from "../../src/compaction/fit";
 import { roles, type Corrections, type Role } from "../../src/tables/table";
 
 /** What the user chose for one table. It travels in the workbook, by sheet and range. */
@@ -11,9 +11,22 @@ export interface Choices {
   readonly assumed: boolean | null;
   /** density of water as typed; "" is that of water at 20 °C in the table's unit */
   readonly waterDensity: string;
+  readonly soil: SoilGrain | null;
+  /** stated scatter as typed: of a point in percent of dry density, of wet density in percent, of water content in points; "" is the usual one */
+  readonly pointScatter: string;
+  readonly wetScatter: string;
+  readonly waterScatter: string;
+  /** points weighed by the doubt of their readings */
+  readonly weigh: boolean;
+  /** the peak that a report gives, as typed, and its standard */
+  readonly reportedDry: string;
+  readonly reportedWater: string;
+  readonly standard: StandardId | null;
+  /** which test is shown, where the selection holds several; null is the first */
+  readonly test: string | null;
 }
 
-export const noChoices: Choices = { corrections: {}, curve: "auto", specificGravity: null, assumed: null, waterDensity: "" };
+export const noChoices: Choices = { corrections: {}, curve: "auto", specificGravity: null, assumed: null, waterDensity: "", soil: null, pointScatter: "", wetScatter: "", waterScatter: "", weigh: false, reportedDry: "", reportedWater: "", standard: null, test: null };
 
 export const writeChoices = (choices: Choices): string => JSON.stringify({ version: 1, ...choices });
 
@@ -27,6 +40,9 @@ function record<T>(value: unknown, good: (entry: unknown) => entry is T): Record
 
 const isRole = (value: unknown): value is Role => roles.includes(value as Role);
 const isText = (value: unknown): value is string => typeof value === "string" && value.length <= 40;
+
+const texts = <Key extends string>(read: Record<string, unknown>, keys: readonly Key[]): Record<Key, string> =>
+  Object.fromEntries(keys.map((key) => [key, isText(read[key]) ? read[key] : ""])) as Record<Key, string>;
 
 /** Reads remembered choices. A workbook may come from anyone: what is not understood is left out. */
 export function readChoices(text: string | null): Choices {
@@ -43,6 +59,10 @@ export function readChoices(text: string | null): Choices {
     curve: curveWords.find((word) => word === read["curve"]) ?? "auto",
     specificGravity: isText(read["specificGravity"]) ? read["specificGravity"] : null,
     assumed: typeof read["assumed"] === "boolean" ? read["assumed"] : null,
-    waterDensity: isText(read["waterDensity"]) ? read["waterDensity"] : "",
+    ...texts(read, ["waterDensity", "pointScatter", "wetScatter", "waterScatter", "reportedDry", "reportedWater"]),
+    soil: soilGrains.find((one) => one === read["soil"]) ?? null,
+    standard: standardIds.find((one) => one === read["standard"]) ?? null,
+    weigh: read["weigh"] === true,
+    test: isText(read["test"]) ? read["test"] : null,
   };
 }

@@ -1,12 +1,13 @@
 import { freeBlock } from "../../src/tables/free-block";
-import { peakFormulas } from "../../src/tables/formulas";
+import { peakFormulas, tableFormula } from "../../src/tables/formulas";
 import { recogniseTable } from "../../src/tables/recognise";
 import type { Place, Table } from "../../src/tables/table";
 import { areaName, cellName, overlap, parseRange, rangeName } from "../../src/workbook/address";
 import type { Area, Placement, PortEvent, Snapshot, WorkbookPort } from "../../src/workbook/port";
 import { isBlank } from "../../src/worksheet/cell";
 import { noChoices, readChoices, writeChoices, type Choices } from "./choices";
-import { lookAt, marksOf, typedNumber, type Fitter, type Look } from "./model";
+import { compare, nameOfLook, noComparing, readComparing, writeComparing, type Comparing, type Comparison, type KeptTest } from "./compare";
+import { besideInPlot, lookAt, marksOf, typedNumber, type Beside, type Fitter, type Look } from "./model";
 
 /** What the view shows; the controller pushes a new one whenever anything changes. */
 export interface Shown {
@@ -16,6 +17,8 @@ export interface Shown {
   /** cells that a write would replace, waiting for the user's consent */
   readonly consent: { readonly cells: readonly Area[]; readonly count: number; readonly at: string } | null;
   readonly canMark: boolean;
+  /** the test shown beside others of its selection and those kept from elsewhere */
+  readonly comparison: Comparison | null;
 }
 
 export interface View {
@@ -46,6 +49,8 @@ export class CurveController {
   private turn = 0;
   /** how often the user has chosen, and what of it is still on its way into the workbook */
   private chosen = 0;
+  private comparing: Comparing = noComparing;
+  private kept: readonly (KeptTest & Beside)[] = [];
   private remembering: Promise<unknown> = Promise.resolve();
 
   constructor(
@@ -57,6 +62,7 @@ export class CurveController {
     this.port.on("selection", () => this.soon("selection"));
     this.port.on("change", () => this.soon("change"));
     this.canMark = (await this.port.abilities()).marks;
+    await this.readKept();
     await this.followSelection();
   }
 
@@ -109,6 +115,7 @@ export class CurveController {
     if (turn !== this.turn) return;
     if (!again.ok) return this.say(turn, again.says);
     this.around = await this.readAround(again.value.area);
+    await this.readKept();
     if (turn !== this.turn) return;
     this.snapshot = again.value;
     this.refresh();
@@ -121,6 +128,42 @@ export class CurveController {
     const window = used && intersection({ sheet: area.sheet, row, column, rows: area.row + area.rows + AROUND - row, columns: area.column + area.columns + AROUND - column }, used);
     const done = window && await this.port.read(window);
     return done?.ok ? done.value : null;
+  }
+
+  /** The kept tests as they stand in the sheet now, each with what the user chose for it. */
+  private async readKept(): Promise<void> {
+    await this.remembering.catch(() => undefined);
+    this.comparing = readComparing(await this.port.recall(COMPARE));
+    this.kept = await Promise.all(this.comparing.kept.map(async ({ area, name }): Promise<KeptTest & Beside> => {
+      const done = await this.port.read(area);
+      if (!done.ok) return { area, name, fit: null, says: done.says, unit: null };
+      const look = lookAt(done.value, readChoices(await this.port.recall(keyOf(area))), this.fitter, await this.readAround(area));
+      return { area, name, fit: look.fit, says: look.noFit?.says ?? look.table.problems[0]?.says ?? "It is not read yet.", unit: look.unit?.id ?? null };
+    }));
+  }
+
+  private async compareAnew(change: Comparing): Promise<void> {
+    this.remembering = this.remembering.catch(() => undefined).then(() => this.port.remember(COMPARE, change.kept.length === 0 && Object.keys(change.efforts).length === 0 ? null : writeComparing(change)));
+    await this.readKept();
+    this.show();
+  }
+
+  /** Keeps the test that is shown beside whatever is selected next. */
+  async keepTest(): Promise<void> {
+    if (!this.look?.fit) return;
+    const area = this.look.table.area, name = nameOfLook(this.look);
+    await this.compareAnew({ ...this.comparing, kept: [...this.comparing.kept.filter((one) => one.name !== name), { area, name }] });
+    this.view.announce(`Kept ${name}. Select another test to see both.`);
+  }
+
+  async dropTest(name: string): Promise<void> {
+    await this.compareAnew({ ...this.comparing, kept: this.comparing.kept.filter((one) => one.name !== name) });
+    this.view.announce(`Dropped ${name} from the comparison; its cells are untouched.`);
+  }
+
+  async setEffort(name: string, text: string): Promise<void> {
+    const { [name]: _, ...others } = this.comparing.efforts;
+    await this.compareAnew({ ...this.comparing, efforts: text.trim() === "" ? others : { ...others, [name]: text.trim() } });
   }
 
   private async usedPart(sheet: string): Promise<Area | null> {
@@ -171,6 +214,7 @@ export class CurveController {
     await this.remembering.catch(() => undefined);
     const remembered = readChoices(await this.port.recall(key));
     const around = await this.readAround(snapshot.area);
+    await this.readKept();
     if (turn !== this.turn) return;
     // what the user chose for this very table while it was being read is newer than what the workbook remembered
     const newer = this.chosen !== chosen && this.snapshot !== null && keyOf(this.snapshot.area) === key;
@@ -193,7 +237,8 @@ export class CurveController {
 
   private show(): void {
     const { consent } = this;
-    this.view.show({ look: this.look, instead: this.instead, consent: consent && { cells: consent.cells, count: countCells(consent.cells), at: consent.at }, canMark: this.canMark });
+    const comparison = this.look && this.look.kind !== "nothing" ? compare(this.look, this.kept, this.comparing) : null;
+    this.view.show({ look: this.look && withKept(this.look, comparison), comparison, instead: this.instead, consent: consent && { cells: consent.cells, count: countCells(consent.cells), at: consent.at }, canMark: this.canMark });
   }
 
   /** The user's word: kept in the workbook for this table, and the pane follows. */
@@ -240,12 +285,25 @@ export class CurveController {
     const { sheet } = snapshot.area;
     const { specificGravity, choices } = look;
     const water = look.water.trouble === null ? typedNumber(choices.waterDensity) ?? null : null;
+    if (look.tests.length > 0) return this.writeTable(look, snapshot, address);
     const formulas = peakFormulas(look.table, { curve: choices.curve, specificGravity: specificGravity.value, waterDensity: water }, sheet);
     if (!formulas) return this.view.announce("There is nothing to write for this table.");
     const at = address.trim() === "" ? await this.freePlace(look.table, { rows: formulas.rowsBefore + reaches.rows, columns: reaches.columns }) : parseRange(address.trim());
     if (!at) return this.view.announce(`"${address.trim()}" is not a cell of this sheet: type one such as ${cellName(look.table.area.row, look.table.area.column + look.table.area.columns + 1)}, or leave it empty.`);
     const placements: Placement[] = [{ sheet, row: at.row, column: at.column, cells: formulas.block(at, reaches) }];
     await this.send(placements, [], cellName(at.row, at.column));
+  }
+
+  /** Several tests in one selection: one formula that gives a row for each. */
+  private async writeTable(look: Look, snapshot: Snapshot, address: string): Promise<void> {
+    const { sheet } = snapshot.area, whole = recogniseTable(snapshot, look.choices.corrections, this.around);
+    const water = look.water.trouble === null ? typedNumber(look.choices.waterDensity) ?? null : null;
+    const formula = tableFormula(whole, look.testsIn, { curve: look.choices.curve, specificGravity: look.specificGravity.value, waterDensity: water }, sheet);
+    if (!formula) return this.view.announce("A table of several tests is written where water content and dry density stand in columns of their own. Select one test at a time.");
+    const reaches = { rows: look.tests.length + 1, columns: TABLE_COLUMNS };
+    const at = address.trim() === "" ? await this.freePlace(whole, reaches) : parseRange(address.trim());
+    if (!at) return this.view.announce(`"${address.trim()}" is not a cell of this sheet: type one such as ${cellName(whole.area.row, whole.area.column + whole.area.columns + 1)}, or leave it empty.`);
+    await this.send([{ sheet, row: at.row, column: at.column, cells: [[{ formula, reaches }]] }], [], cellName(at.row, at.column));
   }
 
   private async send(placements: readonly Placement[], over: readonly Area[], at: string): Promise<void> {
@@ -282,6 +340,22 @@ export class CurveController {
     const filled = (row: number, column: number): boolean => around.ok && !isBlank(around.value.values[row - around.value.area.row]?.[column - around.value.area.column]);
     return freeBlock(area, size, filled, used.row + used.rows - 1);
   }
+}
+
+/** Under which name the comparison travels in the workbook. */
+const COMPARE = "compare";
+/** Columns of PEAKTABLE; a test holds it to the function. */
+export const TABLE_COLUMNS = 10;
+
+/** The plot with the kept curves in it, and the line of optimums where efforts are told. */
+function withKept(look: Look, comparison: Comparison | null): Look {
+  if (!look.plot || !comparison) return look;
+  const kept = comparison.tests.filter(({ is, unit }) => is === "kept" && unit === look.unit?.id), { optimums } = comparison.efforts ?? {};
+  return { ...look, plot: {
+    ...look.plot,
+    beside: [...look.plot.beside, ...kept.flatMap(besideInPlot)],
+    lines: [...look.plot.lines, ...(optimums ? [{ labels: ["line of optimums", "optimums"], at: (water: number) => optimums.at(water) }] : [])],
+  } };
 }
 
 export const keyOf = (area: Area): string => `curve:${areaName(area)}`;

@@ -1,8 +1,10 @@
-import type { CompactionTest, CurveWord, Fit, FitOutcome, NoFit } from "../../src/compaction/fit";
+import type { CompactionTest, CurveWord, Fit, FitOutcome, NoFit, PeakPlace, ReportedPeak } from "../../src/compaction/fit";
+import { USUAL_SCATTER, type Scatter } from "../../src/compaction/scatter";
 import type { Finding, Severity } from "../../src/findings/finding";
 import { airVoidsLine, leastSpecificGravity, zeroAirVoids } from "../../src/phase/lines";
 import { quantity } from "../../src/relations/quantities";
 import { recogniseTable } from "../../src/tables/recognise";
+import { severalTests, type TestPoints } from "../../src/tables/several";
 import type { Place, Table } from "../../src/tables/table";
 import { unitOfWater, type DensityUnit } from "../../src/units/density-units";
 import { WATER_KG_M3_AT_20 } from "../../src/units/water-density";
@@ -12,7 +14,18 @@ import { unitOfId, waterShown, densityShown } from "../parts/figures";
 import type { PlotData, PointMark } from "../plot/plot";
 import type { Choices } from "./choices";
 
-export type Fitter = (test: CompactionTest, curve: CurveWord) => FitOutcome;
+export interface FitterOptions { readonly scatter: Scatter; readonly weigh: boolean }
+export type Fitter = (test: CompactionTest, curve: CurveWord, options: FitterOptions) => FitOutcome;
+
+/** A test beside the one that is shown: another of the same selection, or one that the user keeps for comparison. */
+export interface Beside {
+  readonly name: string;
+  readonly fit: Fit | null;
+  /** why there is no fit */
+  readonly says: string;
+  /** id of its density unit */
+  readonly unit: string | null;
+}
 
 /** A finding with the cells that it speaks of. */
 export interface ShownFinding {
@@ -50,6 +63,16 @@ export interface Look {
   /** the smallest specific gravity at which each point past the line would be possible */
   readonly leastSpecificGravities: readonly (number | null)[];
   readonly plot: PlotData | null;
+  /** the tests of the selection, where it holds several, and which of them is shown */
+  readonly tests: readonly TestPoints[];
+  readonly shownTest: string | null;
+  /** which line of the selection names the tests; −1 where it is one test */
+  readonly testsIn: number;
+  /** the other tests of the selection, fitted the same way */
+  readonly others: readonly Beside[];
+  /** what is wrong with a typed scatter or a reported peak */
+  readonly settingTroubles: readonly string[];
+  readonly ownScatter: boolean;
 }
 
 /** A typed number with either decimal sign; undefined where it is none. */
@@ -57,35 +80,76 @@ export const typedNumber = (text: string): number | undefined => /^\s*\d*[.,]?\d
 
 /** `around` are the cells about the selection, where the specific gravity of the test may stand. */
 export function lookAt(snapshot: Snapshot, choices: Choices, fitter: Fitter, around: Snapshot | null = null): Look {
-  const table = recogniseTable(snapshot, choices.corrections, around);
+  const whole = recogniseTable(snapshot, choices.corrections, around);
+  const { tests, index: testsIn } = severalTests(whole, snapshot), chosen = tests.find(({ name }) => name === choices.test) ?? tests[0];
+  const part = (points: readonly number[]): Table => ({ ...whole, points: points.map((i) => whole.points[i]!), groups: points.map((i) => whole.groups[i]!) });
+  const table = chosen ? part(chosen.points) : whole;
   const unit = table.densityUnit === null ? null : unitOfId(table.densityUnit) ?? null;
   const specificGravity = specificGravityOf(table, choices);
   const water = waterOf(unit, choices);
-  const base = { table, choices, recognised: recognisedWords(table, unit), unit, specificGravity, water };
+  const settings = settingsOf(choices);
+  const base = {
+    table, choices, unit, specificGravity, water, tests, testsIn, shownTest: chosen?.name ?? null, settingTroubles: settings.troubles, ownScatter: settings.own, others: [],
+    recognised: chosen ? `${plural(tests.length, "test")} in one selection, ${chosen.name} shown: ${recognisedWords(table, unit)}` : recognisedWords(table, unit),
+  };
   const nothing = { fit: null, noFit: null, findings: [], marks: [], leastSpecificGravities: [], plot: null };
 
   if (table.body === null && table.points.length === 0) return { ...base, ...nothing, kind: table.problems.length > 0 ? "unreadable" : "nothing" };
   if (unit === null || table.points.length === 0 || water.density === null) return { ...base, ...nothing, kind: "unreadable" };
 
-  const test: CompactionTest = {
-    waters: table.points.map((point) => point.water), dries: table.points.map(({ dry }) => dry), waterDensity: water.density,
+  const { density } = water;
+  const testOf = ({ points }: Table): CompactionTest => ({
+    waters: points.map((point) => point.water), dries: points.map(({ dry }) => dry), waterDensity: density, tins: points.map(({ tins }) => tins),
     ...(specificGravity.value === null ? {} : { specificGravity: specificGravity.value, specificGravityAssumed: specificGravity.assumed }),
-  };
+    ...(choices.soil === null ? {} : { soil: choices.soil }),
+  });
+  const test: CompactionTest = { ...testOf(table), ...(settings.reported ? { reported: settings.reported } : {}) };
   // a point that cannot be read is not quietly left out of a curve: the functions refuse such a range too
   const waits = table.problems.length > 0 || specificGravity.trouble !== null;
-  const outcome = waits ? null : fitter(test, choices.curve);
+  const outcome = waits ? null : fitter(test, choices.curve, settings.options);
   const found = outcome === null ? [] : outcome.ok ? outcome.fit.findings : outcome.noFit.findings;
   const findings = found.map((finding) => shownFinding(finding, table));
   const fit = outcome?.ok ? outcome.fit : null, noFit = outcome && !outcome.ok ? outcome.noFit : null;
+  const others = waits ? [] : tests.filter((one) => one !== chosen).map(({ name, points }): Beside => {
+    const other = fitter(testOf(part(points)), choices.curve, settings.options);
+    return { name, unit: unit.id, fit: other.ok ? other.fit : null, says: other.ok ? "" : other.noFit.says };
+  });
   const marks = table.points.map((_, i) => markOf(findings.filter(({ point }) => point === i)));
   return {
-    ...base, fit, noFit, findings, marks,
+    ...base, fit, noFit, findings, marks, others,
     kind: fit ? "fitted" : noFit ? "no-fit" : "unreadable",
     leastSpecificGravities: table.points.map((point, i) => marks[i] === "past-line"
       ? leastSpecificGravity.value({ waterContent: point.water, dryDensity: point.dry, waterDensity: test.waterDensity }) : null),
-    plot: plotData(test, fit, marks, unit),
+    plot: plotData(test, fit, marks, unit, others),
   };
 }
+
+/** The usual scatter, or the typed one in its place; the reported peak, where one is typed. */
+function settingsOf({ pointScatter, wetScatter, waterScatter, weigh, reportedDry, reportedWater, standard }: Choices): { readonly options: FitterOptions; readonly reported: ReportedPeak | null; readonly troubles: readonly string[]; readonly own: boolean } {
+  const troubles: string[] = [];
+  const read = (text: string, name: string, from: number, to: number, usual: number | undefined): number | undefined => {
+    if (text.trim() === "") return usual;
+    const value = typedNumber(text);
+    if (value !== undefined && value >= from && value <= to) return value;
+    troubles.push(`${name} "${text.trim()}" is not a number between ${from} and ${to}: ${usual === undefined ? "it is left out" : `the usual ${usual} is used`} until it is mended.`);
+    return usual;
+  };
+  const { curve, wetDensity, water } = USUAL_SCATTER;
+  const scatter = {
+    curve: read(pointScatter, "The scatter of a point", 0.05, 5, 100 * curve)! / 100,
+    wetDensity: read(wetScatter, "The scatter of wet density", 0.05, 5, 100 * wetDensity)! / 100,
+    water: read(waterScatter, "The scatter of water content", 0.02, 3, water)!,
+  };
+  const maxDryDensity = read(reportedDry, "The reported maximum dry density", 0.1, 4000, undefined), optimumWater = read(reportedWater, "The reported optimum", 0.1, 500, undefined);
+  return {
+    options: { scatter, weigh }, troubles,
+    own: weigh || scatter.curve !== curve || scatter.wetDensity !== wetDensity || scatter.water !== water,
+    reported: maxDryDensity === undefined && optimumWater === undefined ? null : { maxDryDensity, optimumWater, standard: standard ?? undefined },
+  };
+}
+
+/** The optimum and peak of a fit, as a place in the plot. */
+export const peakPlace = ({ optimumWater, maxDryDensity }: Fit): PeakPlace => ({ water: optimumWater.value, dry: maxDryDensity.value });
 
 function specificGravityOf(table: Table, { specificGravity: typed, assumed }: Choices): SpecificGravity {
   const fromSheet = table.specificGravity;
@@ -135,13 +199,19 @@ function markOf(findings: readonly ShownFinding[]): PointMark {
 /** The lines of constant air voids that a curve is read against. */
 const AIR_LINES = [5, 10] as const;
 
-function plotData(test: CompactionTest, fit: Fit | null, marks: readonly PointMark[], unit: DensityUnit): PlotData {
+export const besideInPlot = ({ name, fit }: Beside): PlotData["beside"] => fit === null ? [] : [{
+  name, at: (water) => fit.at(water), peak: peakPlace(fit),
+  from: Math.min(...fit.used.map((i) => fit.test.waters[i]!)), to: Math.max(...fit.used.map((i) => fit.test.waters[i]!)),
+}];
+
+function plotData(test: CompactionTest, fit: Fit | null, marks: readonly PointMark[], unit: DensityUnit, others: readonly Beside[]): PlotData {
   const { specificGravity, waterDensity } = test;
   return {
     unit: unit.printed,
     points: test.waters.map((water, i) => ({ water, dry: test.dries[i]!, mark: marks[i]!, used: fit === null || fit.used.includes(i) })),
     curve: fit ? { at: (water) => fit.at(water), bandAt: (water) => fit.bandAt(water) } : null,
     peak: fit ? { water: fit.optimumWater.value, dry: fit.maxDryDensity.value, waterInterval: fit.optimumWater, dryInterval: fit.maxDryDensity } : null,
+    beside: others.flatMap(besideInPlot),
     lines: specificGravity === undefined ? [] : [
       { labels: ["zero air voids", "0 % air"], at: (waterContent) => zeroAirVoids.value({ waterContent, specificGravity, waterDensity }) },
       ...AIR_LINES.map((airVoids) => ({ labels: [`${airVoids} % air`, `${airVoids} %`], at: (waterContent: number) => airVoidsLine.value({ waterContent, specificGravity, waterDensity, airVoids }) })),

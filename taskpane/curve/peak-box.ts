@@ -1,4 +1,4 @@
-import type { Fit } from "../../src/compaction/fit";
+import { curveName, type Fit } from "../../src/compaction/fit";
 import { decimalsOfDensity, decimalsOfWater, intervalWords, tied } from "../parts/figures";
 import { h } from "../parts/dom";
 import { CURVE_NAMES, type Look } from "./model";
@@ -11,15 +11,28 @@ export function peakBox(look: Look, fit: Fit): HTMLElement[] {
   const density = decimalsOfDensity(fit.maxDryDensity, unit.id), water = decimalsOfWater();
   const figure = (name: string, id: string, value: string, printed: string, interval: string): HTMLElement =>
     h("div", { class: "figure" }, h("dt", {}, name), h("dd", { id }, h("strong", {}, value), ` ${printed}`), h("dd", { class: "interval" }, tied(interval)));
-  return [
+  const boxes: (HTMLElement | null)[] = [
     h("dl", { class: "peak" },
       figure("Maximum dry density", "max-dry-density", fit.maxDryDensity.value.toFixed(density), unit.printed, intervalWords(fit.maxDryDensity, density)),
       figure("Optimum water content", "optimum-water", fit.optimumWater.value.toFixed(water), "%", intervalWords(fit.optimumWater, water))),
     h("p", { class: "at-optimum", id: "at-optimum" }, fit.saturationAtOptimum === null || fit.airVoidsAtOptimum === null
       ? "Give a specific gravity to see saturation and air voids at the optimum."
       : tied(`At the optimum: saturation ${fit.saturationAtOptimum.toFixed(0)} %, air voids ${fit.airVoidsAtOptimum.toFixed(1)} %.`)),
+    look.shownTest === null ? null : h("p", { class: "quiet" }, `Shown: ${look.shownTest}.`),
+    fit.otherCurves.length > 0 ? h("p", { class: "joined", id: "joined" }, tied(joinedWords(look, fit))) : null,
     h("p", { class: "quiet", id: "why-curve" }, h("b", {}, CURVE_NAMES[fit.curve]), tied(`: ${sentence(fit.reason)} ${sentence(fit.intervalNote)}`)),
   ];
+  return boxes.filter((one) => one !== null);
+}
+
+/** What the other curves say, in one line. */
+function joinedWords(look: Look, fit: Fit): string {
+  const unit = look.unit!, { maxDryDensity, optimumWater } = fit.joined;
+  const density = decimalsOfDensity(fit.maxDryDensity, unit.id), water = decimalsOfWater();
+  const span = ({ low, high }: { readonly low: number | null; readonly high: number | null }, decimals: number): string =>
+    low === null && high === null ? "not located" : low === null ? `up to ${high!.toFixed(decimals)}` : high === null ? `from ${low.toFixed(decimals)}` : `${low.toFixed(decimals)} to ${high.toFixed(decimals)}`;
+  const names = fit.otherCurves.map(({ curve, dry, water: at }) => `${curveName(curve)} ${dry.toFixed(density)} at ${at.toFixed(water)} %`);
+  return `With the doubt about the curve: peak ${span(maxDryDensity, density)}, optimum ${span(optimumWater, water)}${optimumWater.low === null && optimumWater.high === null ? "" : " %"}. As good: ${names.join("; ")}.`;
 }
 
 /** The figures as lines of name, value, low and high, parted by tabs, as a sheet takes them. */

@@ -1,4 +1,5 @@
-import { curveWords, type CurveWord } from "../../src/compaction/fit";
+import { curveWords, soilGrains, standardIds, type CurveWord, type SoilGrain, type StandardId } from "../../src/compaction/fit";
+import { USUAL_SCATTER } from "../../src/compaction/scatter";
 import { WATER_KG_M3_AT_20 } from "../../src/units/water-density";
 import { cellName } from "../../src/workbook/address";
 import { h } from "../parts/dom";
@@ -48,5 +49,36 @@ export function settingsBox(look: Look, choose: (change: Partial<Choices>) => vo
     h("p", { class: specificGravity.trouble ? "trouble" : "quiet", id: "gs-note" }, note),
     h("div", { class: "field" }, h("label", { for: "water" }, `Density of water${unit ? `, ${unit.printed}` : ""}`), h("span", { class: "with-check" }, waterKind, waterTyped)),
     ...(water.trouble ? [h("p", { class: "trouble" }, water.trouble)] : []),
+    moreBox(look, choose),
   ];
+}
+
+type TextChoice = "pointScatter" | "wetScatter" | "waterScatter" | "reportedDry" | "reportedWater";
+
+/** What most tests do not need: the grain of the soil, stated scatter, and a reported peak to hold against the curve. */
+function moreBox(look: Look, choose: (change: Partial<Choices>) => void): HTMLElement {
+  const { choices, unit } = look;
+  const field = (key: TextChoice, label: string, usual: string): HTMLElement => {
+    const id = `set-${key}`, input = h("input", { type: "text", id, inputmode: "decimal", size: 6, autocomplete: "off", placeholder: usual, value: choices[key] });
+    whenTyped(input, (text) => { if (text !== choices[key]) choose({ [key]: text }); });
+    return h("div", { class: "field" }, h("label", { for: id }, label), input);
+  };
+  const soil = h("select", { id: "soil", onchange: () => choose({ soil: (soil.value || null) as SoilGrain | null }) },
+    h("option", { value: "", selected: choices.soil === null }, "not told"), ...soilGrains.map((grain) => h("option", { value: grain, selected: choices.soil === grain }, grain)));
+  const standard = h("select", { id: "standard", onchange: () => choose({ standard: (standard.value || null) as StandardId | null }) },
+    h("option", { value: "", selected: choices.standard === null }, "not told"), ...standardIds.map((id) => h("option", { value: id, selected: choices.standard === id }, id)));
+  const weigh = h("input", { type: "checkbox", id: "weigh", checked: choices.weigh, onchange: () => choose({ weigh: weigh.checked }) });
+  const { curve, wetDensity, water } = USUAL_SCATTER;
+  return h("details", { id: "more" }, h("summary", {}, "Soil, scatter, reported peak"),
+    h("div", { class: "settings" },
+      h("div", { class: "field" }, h("label", { for: "soil" }, "Grain of the soil"), soil),
+      field("wetScatter", "Scatter of wet density, %", String(100 * wetDensity)),
+      field("waterScatter", "Scatter of water content, points", String(water)),
+      field("pointScatter", "Scatter about the curve, %", String(100 * curve)),
+      h("label", { class: "check" }, weigh, " weigh points by the doubt of their readings"),
+      field("reportedDry", `Reported peak${unit ? `, ${unit.printed}` : ""}`, "none"),
+      field("reportedWater", "Reported optimum, %", "none"),
+      h("div", { class: "field" }, h("label", { for: "standard" }, "Standard"), standard),
+      ...look.settingTroubles.map((text) => h("p", { class: "trouble" }, text)),
+      look.ownScatter ? h("p", { class: "quiet", id: "own-scatter" }, "Functions in the sheet use the usual scatter and equal weights: what is written there may differ from the figures here.") : null));
 }

@@ -5,8 +5,10 @@ import { tied } from "../parts/figures";
 import { icon } from "../parts/icons";
 import { cautions } from "./cautions";
 import { columnsBox } from "./columns-box";
+import { compareBox, type OnePoint } from "./compare-box";
 import type { CurveController, Shown, View } from "./controller";
 import { findingsBox } from "./findings-box";
+import { leaveOneOutBox } from "./leave-one-out-box";
 import { CURVE_NAMES, type Look } from "./model";
 import { peakBox, valuesText } from "./peak-box";
 import { PlotFigure } from "./plot-figure";
@@ -20,6 +22,8 @@ export class CurveView implements View {
   private readonly plot: PlotFigure;
   private readonly result = h("section", { class: "result", "aria-label": "Peak of the curve", id: "result" });
   private readonly findings = h("section", { class: "card", "aria-label": "What to look at", id: "findings" });
+  private readonly compare = h("section", { class: "card compare", "aria-label": "Several tests", id: "compare" });
+  private readonly onePoint: OnePoint = { water: "", dry: "", rule: "between" };
   private readonly actions = h("section", { class: "card actions", "aria-label": "In the sheet", id: "actions" });
   private readonly status = h("p", { class: "status", role: "status", "aria-live": "polite", id: "status" });
   private writeAt = "";
@@ -29,7 +33,7 @@ export class CurveView implements View {
     this.plot = new PlotFigure((area) => void this.controller().goTo(area));
     pane.replaceChildren(
       h("header", { class: "head" }, h("h1", {}, "Compaction curve"), h("span", { class: "maker" }, "Tampsheet")),
-      h("main", {}, this.table, this.plot.element, this.result, this.settings, this.findings, this.actions),
+      h("main", {}, this.table, this.plot.element, this.result, this.settings, this.findings, this.compare, this.actions),
       this.status,
       h("footer", {}, h("details", { class: "cautions" }, h("summary", {}, cautions.line), h("ul", {}, ...cautions.full.map((text) => h("li", {}, text))))),
     );
@@ -41,19 +45,23 @@ export class CurveView implements View {
     this.status.textContent = text;
   }
 
-  show({ look, instead, consent, canMark }: Shown): void {
+  show({ look, instead, consent, canMark, comparison }: Shown): void {
     const readable = look !== null && look.kind !== "nothing";
     this.showTable(look, instead);
     refill(this.settings, ...(readable ? settingsBox(look, (change) => void this.controller().choose(change)) : []));
     this.plot.show(look);
-    refill(this.result, ...(look?.fit ? peakBox(look, look.fit) : look?.noFit ? [noFitBox(look)] : []));
+    refill(this.result, ...(look?.fit ? [...peakBox(look, look.fit), leaveOneOutBox(look, look.fit)] : look?.noFit ? [noFitBox(look)] : []));
     refill(this.findings, ...(look && (look.fit || look.findings.length > 0) ? findingsBox(look, (area) => void this.controller().goTo(area)) : []));
+    refill(this.compare, ...(look && comparison ? compareBox(comparison, this.onePoint, {
+      keep: () => void this.controller().keepTest(), drop: (name) => void this.controller().dropTest(name),
+      effort: (name, text) => void this.controller().setEffort(name, text), show: (test) => void this.controller().choose({ test }),
+    }) : []));
     const asked = document.getElementById("consent") !== null;
     this.showActions(look, consent, canMark);
     // the question is answered where it is put; Keep is the safe answer
     if (consent && !asked) document.getElementById("keep")?.focus();
     if (!consent && asked) document.getElementById("write")?.focus({ preventScroll: true });
-    for (const section of [this.settings, this.result, this.findings, this.actions]) section.hidden = section.childElementCount === 0;
+    for (const section of [this.settings, this.result, this.findings, this.compare, this.actions]) section.hidden = section.childElementCount === 0;
   }
 
   private showTable(look: Look | null, instead: string | null): void {

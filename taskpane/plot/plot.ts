@@ -15,6 +15,8 @@ export interface PlotData {
   /** the zero-air-voids line first, then its sister lines */
   readonly lines: readonly { /** the first that finds room on the line is drawn */ readonly labels: readonly string[]; at(water: number): number }[];
   readonly unit: string;
+  /** curves of other tests, drawn faintly with their peaks */
+  readonly beside: readonly { readonly name: string; readonly from: number; readonly to: number; readonly peak: { readonly water: number; readonly dry: number }; at(water: number): number }[];
 }
 
 export interface Drawing {
@@ -35,12 +37,14 @@ const escape = (text: string): string => text.replace(/[&<>"]/g, (sign) => ({ "&
 export function drawPlot(data: PlotData, size: { readonly width: number; readonly height: number }, description: string): Drawing {
   const { width, height } = size;
   const frame = { left: MARGIN.left, right: width - MARGIN.right, top: MARGIN.top, bottom: height - MARGIN.bottom };
-  const waters = data.points.map(({ water }) => water), dries = data.points.map(({ dry }) => dry);
+  const faint = data.beside.map(({ name, from, to, peak, at }) => ({ name, peak, path: Array.from({ length: SAMPLES + 1 }, (_, i): [number, number] => { const water = from + (to - from) * i / SAMPLES; return [water, at(water)]; }) }));
+  const waters = [...data.points.map(({ water }) => water), ...faint.flatMap(({ path: all }) => [all[0]![0], all[SAMPLES]![0]])], dries = [...data.points.map(({ dry }) => dry), ...faint.flatMap(({ path: all }) => all.map(([, dry]) => dry))];
   const first = Math.min(...waters), last = Math.max(...waters);
   const lowest = Math.min(...dries), highest = Math.max(...dries);
   const spread = highest - lowest || highest * 0.02;
 
-  const along = Array.from({ length: SAMPLES + 1 }, (_, i) => first + (last - first) * i / SAMPLES);
+  const own = data.points.map(({ water }) => water), driest = Math.min(...own), wettest = Math.max(...own);
+  const along = Array.from({ length: SAMPLES + 1 }, (_, i) => driest + (wettest - driest) * i / SAMPLES);
   const curve = data.curve;
   const onCurve = curve ? along.map((water) => curve.at(water)) : [];
   const band = curve ? along.map((water) => curve.bandAt(water)) : [];
@@ -60,6 +64,7 @@ export function drawPlot(data: PlotData, size: { readonly width: number; readonl
 
   const clipped: string[] = [];
   if (curve) clipped.push(`<path class="plot-band" d="${path(along.map((water, i) => [water, band[i]!.high]))}${path(along.map((water, i): [number, number] => [water, band[i]!.low]).reverse()).replace("M", "L")}Z"/>`);
+  for (const { path: all } of faint) clipped.push(`<path class="plot-beside" d="${path(all)}"/>`);
   data.lines.forEach(({ at }, i) => clipped.push(`<path class="plot-line${i === 0 ? " plot-line-full" : ""}" d="${path(across.map((water) => [water, at(water)]))}"/>`));
   if (curve) clipped.push(`<path class="plot-curve" d="${path(along.map((water, i) => [water, onCurve[i]!]))}"/>`);
 
@@ -75,6 +80,10 @@ export function drawPlot(data: PlotData, size: { readonly width: number; readonl
     labels.push(`<text class="plot-label" text-anchor="middle" dy="3.5" transform="translate(${n(placed.x)} ${n(placed.y)}) rotate(${n(placed.angle)})">${escape(label)}</text>`);
   }
 
+  for (const { name, peak } of faint) {
+    const at = { x: x.px(peak.water), y: y.px(peak.dry) - 9 }, half = name.length * LETTER / 2;
+    labels.push(`<circle class="plot-beside-peak" cx="${n(at.x)}" cy="${n(at.y + 9)}" r="3"/>`, `<text class="plot-label plot-beside-name" text-anchor="middle" x="${n(Math.min(frame.right - half - 2, Math.max(frame.left + half + 2, at.x)))}" y="${n(at.y)}">${escape(name)}</text>`);
+  }
   if (data.peak) clipped.push(whiskers(data.peak, x.px, y.px, frame));
   const dots = data.points.map((point, i) => shape(point, spots[i]!));
 

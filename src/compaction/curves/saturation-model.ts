@@ -78,7 +78,7 @@ const LOW: Vector = [0.5, 0, 0.5, 0.02], HIGH: Vector = [1, 0, 25, 5];
 
 /** Where the search begins: the turn as a multiple of the water content of the highest point, sharpness, dry shape. Tried by measuring on 200 seeded curves. */
 const STARTS = [[1.2, 4, 0.3], [1.3, 6, 0.55], [1.5, 7.5, 0.58], [1.1, 8, 0.25], [1.4, 2, 0.6]] as const;
-const EXACT = 1e-6, FINE = 5e-4, SAME_VALLEY = 1e-4;
+const EXACT = 1e-6, FINE = 5e-4, ROUGH = 1e-3, SAME_VALLEY = 1e-3;
 
 export interface SaturationFit extends LeastSquaresFit { readonly shape: SaturationParameters }
 
@@ -129,9 +129,9 @@ export function saturationBounds(waters: readonly number[]): { low: number[]; hi
  * Fits the curve to a test.
  * Starts from several turns of the curve and keeps the best: the sum of squares can have more than one valley. A start that is given is the only one.
  */
-export function fitSaturation(points: SaturationPoints, start?: readonly number[]): SaturationFit {
+export function fitSaturation(points: SaturationPoints, start?: readonly number[], tolerance = 1e-8): SaturationFit {
   const { waters, dries, specificGravity, waterDensity } = points;
-  const model = saturationModel(points), options = { ...saturationBounds(waters), tolerance: 1e-8, maxEvaluations: 600 };
+  const model = saturationModel(points), options = { ...saturationBounds(waters), tolerance, maxEvaluations: 600 };
   if (start) return withShape(fitNonlinear(model, start, options));
   const highest = dries.indexOf(Math.max(...dries));
   const saturations = waters.map((w, i) => Math.min(1, w / 100 / (waterDensity / dries[i]! - 1 / specificGravity)));
@@ -142,13 +142,18 @@ export function fitSaturation(points: SaturationPoints, start?: readonly number[
     model.evaluate(at, residuals, null);
     return { at, sum: residuals.reduce((sum, r) => sum + r * r, 0) };
   }).sort((a, b) => a.sum - b.sum);
+  // less than this no readings scatter
+  const noise = waters.length * (FINE * dries[highest]!) ** 2;
   let best: LeastSquaresFit | undefined;
   for (const { at } of starts) {
-    const fit = fitNonlinear(model, [...at], options), before = best;
+    const before = best, exact = !best || best.sumOfSquares < noise;
+    let fit = fitNonlinear(model, [...at], exact ? options : { ...options, tolerance: ROUGH });
+    // a better valley, found roughly: to its floor
+    if (!exact && fit.sumOfSquares < best!.sumOfSquares * (1 - SAME_VALLEY)) fit = fitNonlinear(model, [...fit.parameters], options);
     if (!best || fit.sumOfSquares < best.sumOfSquares * (1 - 1e-9)) best = fit;
     // points that lie on the curve to far more than they were measured, or two ways to the same valley: there is no better to look for
     if (best.sumOfSquares < waters.length * (EXACT * dries[highest]!) ** 2) break;
-    if (before && best.sumOfSquares > waters.length * (FINE * dries[highest]!) ** 2 && Math.abs(fit.sumOfSquares - before.sumOfSquares) <= SAME_VALLEY * before.sumOfSquares) break;
+    if (before && best.sumOfSquares > noise && Math.abs(fit.sumOfSquares - before.sumOfSquares) <= SAME_VALLEY * before.sumOfSquares) break;
   }
   return withShape(best!);
 }

@@ -26,10 +26,13 @@ export const saturation: Curve = {
   },
 };
 
+/** Near enough for a table of peaks: the sum of squares is then its least to far below the scatter. */
+const NEAR = 1e-4;
+
 /** The same curve fitted anew from near its answer, as when one point is left out. */
 export function refitSaturation(test: CompactionTest, near: readonly number[], weights: readonly number[]): { readonly water: number; readonly dry: number } | null {
   const { waters, dries, waterDensity } = test, specificGravity = test.specificGravity!;
-  const fit = fitSaturation({ waters, dries, specificGravity, waterDensity, weights }, near);
+  const fit = fitSaturation({ waters, dries, specificGravity, waterDensity, weights }, near, NEAR);
   return inside(test, summitWithSlopes(fit.parameters as unknown as Vector, specificGravity, waterDensity, null, null));
 }
 
@@ -57,9 +60,12 @@ function fitted(test: CompactionTest, options: FitOptions, points: SaturationPoi
   } as FittedSaturation;
 }
 
-/** How hard a pulled fit is held to its target: the fit it gives is an exact point of the profile wherever it ends. */
+/** How hard a pulled fit is held to its target, in steps: the fit it gives is an exact point of the profile wherever it ends. */
 const HOLD = 8;
-const ROUNDS = 6, CLOSE_ENOUGH = 0.05;
+const ROUNDS = 12, CLOSE_ENOUGH = 0.05;
+
+/** A fit with its peak pulled aside: where the peak came to lie, and the root of the rise in units of the limit. */
+interface Tried { readonly reached: number; readonly rise: number; readonly at: readonly number[] }
 
 /**
  * Profile intervals: how far the peak can be pulled before the weighted sum of squares rises by the square of the
@@ -80,43 +86,67 @@ function reckon(points: SaturationPoints, fit: SaturationFit, peak: { readonly w
     return sum > 0 ? Math.sqrt(sum) : null;
   };
 
-  const end = (which: "water" | "dry", side: -1 | 1, first: number): number | null => {
-    const middle = peak[which];
-    const low = which === "water" ? driest : 0, high = which === "water" ? wettest : Infinity;
-    let target = middle + side * first, start: readonly number[] = [...fit.parameters];
-    let below = 0, belowAt = middle, above: number | null = null, aboveAt = 0;
-    for (let round = 0; round < ROUNDS; round++) {
-      const held = Math.min(high, Math.max(low, target)), scale = HOLD / Math.max(Math.abs(held - middle), 1e-9 * Math.abs(middle));
-      const pulled = fitNonlinear(saturationModel(points, (at, slopes) => {
-        const top = summitWithSlopes(at, specificGravity, waterDensity, which === "water" ? slopes : null, which === "dry" ? slopes : null);
-        if (!top) { slopes?.fill(0); return scale * (which === "water" ? -held : held); }
-        if (slopes) for (let j = 0; j < 4; j++) slopes[j]! *= scale;
-        return scale * (top[which] - held);
-      }), start, { ...bounds, tolerance: 1e-3, maxEvaluations: 60 });
-      const top = summitWithSlopes(pulled.parameters as unknown as Vector, specificGravity, waterDensity, null, null);
-      if (!top) return null;
-      const pull = pulled.residuals[waters.length]!, rise = Math.sqrt(Math.max(0, pulled.sumOfSquares - pull * pull - fit.sumOfSquares)) / k;
-      start = [...pulled.parameters];
-      const reached = top[which];
-      // the root of the rise is all but a straight line: what is left of the way is told from it
-      if (Math.abs(rise - 1) < CLOSE_ENOUGH) return Math.min(high, Math.max(low, middle + (reached - middle) / rise));
-      if (rise < 1) { below = rise; belowAt = reached; } else { above = rise; aboveAt = reached; }
-      // held against the end of the data, and still not refused: the data do not bound it
-      if (rise < 1 && which === "water" && held === (side < 0 ? low : high)) return null;
-      // a bound of the parameters stops it: nothing further is possible
-      if (rise < 1 && Math.abs(reached - held) > 0.2 * Math.abs(held - middle)) return reached;
-      target = above === null
-        ? middle + Math.min(4, 1 / Math.max(rise, 0.25)) * (reached - middle)
-        : belowAt + (aboveAt - belowAt) * (1 - below) / (above - below);
-    }
-    return above === null ? null : belowAt + (aboveAt - belowAt) * (1 - below) / (above - below);
+  /** The best fit with its peak held near a place: where the peak comes to lie, and how far the fit has risen, in units of the limit. */
+  const pullOnce = (which: "water" | "dry", held: number, per: number, start: readonly number[], tolerance: number): Tried | null => {
+    const pulled = fitNonlinear(saturationModel(points, (at, slopes) => {
+      const top = summitWithSlopes(at, specificGravity, waterDensity, which === "water" ? slopes : null, which === "dry" ? slopes : null);
+      if (!top) { slopes?.fill(0); return HOLD * held / per; }
+      if (slopes) for (let j = 0; j < 4; j++) slopes[j]! *= HOLD / per;
+      return HOLD * (top[which] - held) / per;
+    }), start, { ...bounds, tolerance, maxEvaluations: 400 });
+    const top = summitWithSlopes(pulled.parameters as unknown as Vector, specificGravity, waterDensity, null, null), last = pulled.residuals[waters.length]!;
+    return top && { reached: top[which], rise: Math.sqrt(Math.max(0, pulled.sumOfSquares - last * last - fit.sumOfSquares)) / k, at: [...pulled.parameters] };
   };
-  const firstOf = (slopes: ArrayLike<number>, span: number): number => Math.min(k * (deviation(slopes) ?? Infinity), span);
-  const water = firstOf(byWater, (wettest - driest) / 2), dry = firstOf(byDry, 0.05 * peak.dry);
+
+  /** Roughly first; a fit that seems to pass the limit is brought to its floor before that is believed. */
+  const pull = (which: "water" | "dry", held: number, per: number, start: readonly number[]): Tried | null => {
+    const rough = pullOnce(which, held, per, start, 1e-2);
+    return rough === null || rough.rise < 0.8 ? rough : pullOnce(which, held, per, rough.at, 1e-3);
+  };
+
+  /** Walks outward in steps that follow the rise, each begun where the last one ended, until the limit is passed; then between the last two. */
+  const end = (which: "water" | "dry", side: -1 | 1, first: number): number | null => {
+    const middle = peak[which], last = which === "dry" ? null : side < 0 ? driest : wettest;
+    let inside: Tried = { reached: middle, rise: 0, at: [...fit.parameters] }, step = first;
+    for (let round = 0; round < ROUNDS; round++) {
+      const atEnd = last !== null && side * (inside.reached + side * step - last) >= 0, held = atEnd ? last : inside.reached + side * step;
+      const per = Math.max(Math.abs(held - inside.reached), 1e-9 * middle), tried = pull(which, held, per, inside.at);
+      if (tried === null || side * (tried.reached - inside.reached) < 0.1 * per) {
+        // the walk is stuck: a shorter step, or nothing more is possible
+        if (step < 0.02 * first) break;
+        step /= 4;
+        continue;
+      }
+      if (tried.rise >= 1 - CLOSE_ENOUGH) return between(which, side, inside, tried);
+      if (atEnd && Math.abs(tried.reached - last) < 0.02 * (wettest - driest)) return null;
+      const gained = (tried.rise - inside.rise) / Math.abs(tried.reached - inside.reached);
+      step = Math.min(3 * step, Math.max(0.3 * step, gained > 0 ? 1.03 * (1 - tried.rise) / gained : 3 * step));
+      inside = tried;
+    }
+    if (inside.rise > 0.9) return inside.reached;
+    // a density is always located: told on from the rise so far, or from the slopes at the fit
+    return which === "water" ? null : inside.rise > 0.2 ? middle + (inside.reached - middle) / inside.rise : middle + side * first;
+  };
+
+  const between = (which: "water" | "dry", side: -1 | 1, from: Tried, to: Tried): number => {
+    let inside = from, outside = to;
+    for (let round = 0; round < 4 && outside.rise - 1 > CLOSE_ENOUGH; round++) {
+      const share = (1 - inside.rise) / (outside.rise - inside.rise), held = inside.reached + share * (outside.reached - inside.reached);
+      const tried = pull(which, held, Math.max(Math.abs(outside.reached - inside.reached) / 2, 1e-9 * peak[which]), inside.at);
+      if (tried === null || side * (tried.reached - inside.reached) <= 0 || side * (outside.reached - tried.reached) <= 0) break;
+      if (tried.rise < 1) inside = tried; else outside = tried;
+      if (Math.abs(tried.rise - 1) <= CLOSE_ENOUGH) break;
+    }
+    // the root of the rise is all but a straight line between the two
+    return inside.reached + (outside.reached - inside.reached) * (1 - inside.rise) / (outside.rise - inside.rise);
+  };
+  const firstOf = (slopes: ArrayLike<number>, most: number): number => Math.min(k * (deviation(slopes) ?? Infinity), most);
+  const water = firstOf(byWater, (wettest - driest) / 12), dry = firstOf(byDry, 0.01 * k * peak.dry);
   const optimumWater: PeakInterval = { low: end("water", -1, water), high: end("water", 1, water) };
   return {
     method: "profile", widening, optimumWater,
-    maxDryDensity: { low: end("dry", -1, dry), high: end("dry", 1, dry) },
+    // where the optimum may lie outside the data, so may a greater density
+    maxDryDensity: { low: end("dry", -1, dry), high: optimumWater.low === null || optimumWater.high === null ? null : end("dry", 1, dry) },
     halfBand: (at) => {
       const slopes = curveSlopes(at, fit.parameters as unknown as Vector, specificGravity, waterDensity);
       return k * (deviation(slopes) ?? 1 / Math.min(...points.weights!));

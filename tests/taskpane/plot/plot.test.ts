@@ -36,7 +36,7 @@ const data: PlotData = {
   curve: { at: (w) => 2.0077 - 0.0123 * (w - 11.1) ** 2, bandAt: (w) => ({ low: 2 - 0.0123 * (w - 11.1) ** 2, high: 2.015 - 0.0123 * (w - 11.1) ** 2 }) },
   peak: { water: 11.1, dry: 2.0077, waterInterval: { low: 10.9, high: null }, dryInterval: { low: 1.998, high: 2.017 } },
   lines: [{ labels: ["zero air voids"], at: (w) => 0.9982 / (w / 100 + 1 / 2.7) }],
-  unit: "Mg/m³",
+  unit: "Mg/m³", beside: [],
 };
 
 describe("the drawing", () => {
