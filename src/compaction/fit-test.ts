@@ -3,7 +3,7 @@ import { airVoidsOfPoint, degreeOfSaturation } from "../phase/lines";
 import { curveOf } from "./curves";
 import { residualsOf, spareOf, type Curve, type FitOptions, type FittedCurve } from "./curves/curve";
 import { distinctWaters } from "./curves/curve";
-import { curveName, type CompactionTest, type CurveWord, type Fit, type FitOutcome, type NoFit, type PeakPlace } from "./fit";
+import { curveName, type CompactionTest, type CurveWord, type Fit, type FitOutcome, type NoFit, type PeakIntervals, type PeakPlace } from "./fit";
 import { peaksLeavingOneOut } from "./leave-one-out";
 import { curveRules } from "./quality";
 import { outlier } from "./quality/outlier";
@@ -83,7 +83,7 @@ function finish(test: CompactionTest, options: FitOptions, fitted: FittedCurve, 
   const spare = spareOf(fitted), { peak, at } = fitted, reckoning = fitted.reckon(), otherCurves = othersThan(fitted, weighing);
   const { specificGravity, waterDensity } = test;
   const atPeak = specificGravity === undefined ? undefined : { dryDensity: peak.dry, waterContent: peak.water, specificGravity, waterDensity };
-  let leftOut: (PeakPlace | null)[] | undefined;
+  let leftOut: (PeakPlace | null)[] | undefined, joined: PeakIntervals | undefined;
   const fit: Fit = {
     test, reason, curve: fitted.curve.id, used: fitted.used, parameters: fitted.parameters, at,
     maxDryDensity: { value: peak.dry, ...reckoning.maxDryDensity },
@@ -96,7 +96,7 @@ function finish(test: CompactionTest, options: FitOptions, fitted: FittedCurve, 
     saturationAtOptimum: atPeak ? positive(degreeOfSaturation.value(atPeak)) : null,
     airVoidsAtOptimum: atPeak ? airVoidsOfPoint.value(atPeak) : null,
     otherCurves,
-    joined: joinedInterval(reckoning, otherCurves),
+    joined: () => joined ??= joinedInterval(reckoning, otherCurves),
     leaveOneOut: () => leftOut ??= peaksLeavingOneOut(test, fitted, options),
     bandAt(water) {
       const half = reckoning.halfBand(water), middle = at(water);

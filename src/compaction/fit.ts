@@ -48,8 +48,10 @@ export interface PeakPlace { readonly water: number; readonly dry: number }
 /** A curve that the points cannot tell from the chosen one. */
 export interface OtherCurve extends PeakPlace {
   readonly curve: CurveId;
-  /** null where it has no spare point, and so nothing to be judged by */
-  readonly interval: PeakIntervals | null;
+  /** false where it has no spare point, and so nothing to be judged by */
+  readonly judged: boolean;
+  /** computed when first asked for; null where it is not judged */
+  intervals(): PeakIntervals | null;
 }
 
 export interface PeakIntervals { readonly maxDryDensity: PeakInterval; readonly optimumWater: PeakInterval }
@@ -70,8 +72,8 @@ export interface Fit {
   readonly widening: number;
   /** other admissible curves that the points cannot tell from this one, with what they say */
   readonly otherCurves: readonly OtherCurve[];
-  /** the interval of this curve joined with what the other curves say: scatter and doubt about the curve in one */
-  readonly joined: PeakIntervals;
+  /** the interval of this curve joined with what the other curves say: scatter and doubt about the curve in one. Computed when first asked for. */
+  joined(): PeakIntervals;
   /** the peak without each point in turn; null where the curve cannot be fitted without it. Computed when first asked for. */
   leaveOneOut(): readonly (PeakPlace | null)[];
   /** root of the residual sum of squares over the spare points; null where none is left over */

@@ -63,8 +63,7 @@ export function othersThan(chosen: FittedCurve, { admitted, possible }: Weighing
     if (one.curve === chosen.curve) return [];
     const weight = admitted.find(({ fitted }) => fitted === one)?.weight;
     if (weight !== undefined && weight >= least + TELLING) return [];
-    const { maxDryDensity, optimumWater } = weight === undefined ? { maxDryDensity: null, optimumWater: null } : one.reckon();
-    return [{ curve: one.curve.id, ...one.peak, interval: maxDryDensity && { maxDryDensity, optimumWater } }];
+    return [{ curve: one.curve.id, ...one.peak, judged: weight !== undefined, intervals: () => weight === undefined ? null : one.reckon() }];
   });
 }
 
@@ -73,7 +72,7 @@ export function joinedInterval(own: PeakIntervals, others: readonly OtherCurve[]
   const join = (which: keyof PeakIntervals, place: keyof PeakPlace): PeakInterval => {
     let { low, high } = own[which];
     for (const other of others) {
-      const theirs = other.interval?.[which] ?? { low: other[place], high: other[place] };
+      const theirs = other.intervals()?.[which] ?? { low: other[place], high: other[place] };
       low = low === null || theirs.low === null ? null : Math.min(low, theirs.low);
       high = high === null || theirs.high === null ? null : Math.max(high, theirs.high);
     }

@@ -36,8 +36,8 @@ export function peakBlock(cells: TestCells): Cell[][] | CellError {
     ["points used", fit.used.length, `of ${fit.test.waters.length}`, ""],
     ["what to look at", first ? first.says : "nothing found", more.length > 0 ? `and ${more.length} more: see CURVEFLAGS` : "", ""],
     ["curves that do as well", fit.otherCurves.length > 0 ? fit.otherCurves.map(({ curve }) => curveName(curve)).join(", ") : "none", "", ""],
-    figure("dry density, whichever of them", { value: fit.maxDryDensity.value, ...fit.joined.maxDryDensity }),
-    figure("optimum, whichever of them, %", { value: fit.optimumWater.value, ...fit.joined.optimumWater }),
+    figure("dry density, whichever of them", { value: fit.maxDryDensity.value, ...fit.joined().maxDryDensity }),
+    figure("optimum, whichever of them, %", { value: fit.optimumWater.value, ...fit.joined().optimumWater }),
   ];
 }
 

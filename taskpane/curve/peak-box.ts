@@ -9,12 +9,13 @@ const sentence = (text: string): string => `${text.charAt(0).toUpperCase()}${tex
 export function peakBox(look: Look, fit: Fit): HTMLElement[] {
   const unit = look.unit!;
   const density = decimalsOfDensity(fit.maxDryDensity, unit.id), water = decimalsOfWater();
-  const figure = (name: string, id: string, value: string, printed: string, interval: string): HTMLElement =>
-    h("div", { class: "figure" }, h("dt", {}, name), h("dd", { id }, h("strong", {}, value), ` ${printed}`), h("dd", { class: "interval" }, tied(interval)));
+  const figure = (name: string, id: string, value: string, printed: string, interval: string, joined: string | null): HTMLElement =>
+    h("div", { class: "figure" }, h("dt", {}, name), h("dd", { id }, h("strong", {}, value), ` ${printed}`), h("dd", { class: "interval" }, tied(interval)), joined === null ? null : h("dd", { class: "interval whichever", id: `${id}-whichever` }, tied(joined)));
+  const whichever = fit.otherCurves.length > 0 ? fit.joined() : null;
   const boxes: (HTMLElement | null)[] = [
     h("dl", { class: "peak" },
-      figure("Maximum dry density", "max-dry-density", fit.maxDryDensity.value.toFixed(density), unit.printed, intervalWords(fit.maxDryDensity, density)),
-      figure("Optimum water content", "optimum-water", fit.optimumWater.value.toFixed(water), "%", intervalWords(fit.optimumWater, water))),
+      figure("Maximum dry density", "max-dry-density", fit.maxDryDensity.value.toFixed(density), unit.printed, intervalWords(fit.maxDryDensity, density), whichever && `whichever curve: ${span(whichever.maxDryDensity, density)}`),
+      figure("Optimum water content", "optimum-water", fit.optimumWater.value.toFixed(water), "%", intervalWords(fit.optimumWater, water), whichever && `whichever curve: ${span(whichever.optimumWater, water)}`)),
     h("p", { class: "at-optimum", id: "at-optimum" }, fit.saturationAtOptimum === null || fit.airVoidsAtOptimum === null
       ? "Give a specific gravity to see saturation and air voids at the optimum."
       : tied(`At the optimum: saturation ${fit.saturationAtOptimum.toFixed(0)} %, air voids ${fit.airVoidsAtOptimum.toFixed(1)} %.`)),
@@ -25,14 +26,13 @@ export function peakBox(look: Look, fit: Fit): HTMLElement[] {
   return boxes.filter((one) => one !== null);
 }
 
-/** What the other curves say, in one line. */
+const span = ({ low, high }: { readonly low: number | null; readonly high: number | null }, decimals: number): string =>
+  low === null && high === null ? "not located" : low === null ? `up to ${high!.toFixed(decimals)}` : high === null ? `from ${low.toFixed(decimals)}` : `${low.toFixed(decimals)} to ${high.toFixed(decimals)}`;
+
+/** The other curves that follow the points as well, in one line. */
 function joinedWords(look: Look, fit: Fit): string {
-  const unit = look.unit!, { maxDryDensity, optimumWater } = fit.joined;
-  const density = decimalsOfDensity(fit.maxDryDensity, unit.id), water = decimalsOfWater();
-  const span = ({ low, high }: { readonly low: number | null; readonly high: number | null }, decimals: number): string =>
-    low === null && high === null ? "not located" : low === null ? `up to ${high!.toFixed(decimals)}` : high === null ? `from ${low.toFixed(decimals)}` : `${low.toFixed(decimals)} to ${high.toFixed(decimals)}`;
-  const names = fit.otherCurves.map(({ curve, dry, water: at }) => `${curveName(curve)} ${dry.toFixed(density)} at ${at.toFixed(water)} %`);
-  return `With the doubt about the curve: peak ${span(maxDryDensity, density)}, optimum ${span(optimumWater, water)}${optimumWater.low === null && optimumWater.high === null ? "" : " %"}. As good: ${names.join("; ")}.`;
+  const density = decimalsOfDensity(fit.maxDryDensity, look.unit!.id), water = decimalsOfWater();
+  return `These follow the points as well: ${fit.otherCurves.map(({ curve, dry, water: at }) => `${curveName(curve)}, ${dry.toFixed(density)} at ${at.toFixed(water)} %`).join("; ")}.`;
 }
 
 /** The figures as lines of name, value, low and high, parted by tabs, as a sheet takes them. */

@@ -41,7 +41,7 @@ function coverage(row: Row): string[] {
     const { waters, dries } = drawTest(row, random);
     const outcome = fitTest({ waters, dries, specificGravity: GS, waterDensity: RHO }, row.curve, { weigh: row.weigh });
     if (!outcome.ok) continue;
-    const { optimumWater, maxDryDensity, joined }: Fit = outcome.fit, { truth } = row;
+    const { optimumWater, maxDryDensity, joined: join }: Fit = outcome.fit, joined = join(), { truth } = row;
     fitted++;
     bias += optimumWater.value - truth.water;
     if (holds(optimumWater.low, optimumWater.high, truth.water)) water++;

@@ -165,4 +165,43 @@ test("every control has a name, and nothing scrolls sideways at 320 px", async (
   expect(await pane.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(320);
 });
 
+test("several tests in one selection: shown one by one, drawn together, kept, and written as one table", async () => {
+  const book = new ExcelJS.Workbook(), series = book.addWorksheet("Series");
+  series.addRow(["Test", "Water content (%)", "Dry density (Mg/m³)"]);
+  for (const [name, optimum, most] of [["pit 1", 17, 1.70], ["pit 2", 15, 1.80], ["pit 3", 12, 1.91]] as const)
+    [-4, -2, 0, 2, 4].forEach((step, i) => series.addRow([i === 0 ? name : null, optimum + step, most - 0.005 * step * step]));
+  // the edits of the tests before are not saved: the bench asks, and is told to go on
+  page.once("dialog", (dialog) => void dialog.accept());
+  await page.setInputFiles("#file", { name: "series.xlsx", mimeType: "application/vnd.openxmlformats-officedocument.spreadsheetml.sheet", buffer: Buffer.from(await book.xlsx.writeBuffer()) });
+  await page.waitForFunction(() => document.getElementById("file-name")?.textContent === "series.xlsx");
+  await select({ sheet: "Series", row: 0, column: 0, rows: 16, columns: 3 });
+  await pane.waitForFunction(() => document.getElementById("recognised")?.textContent?.startsWith("3 tests in one selection, pit 1 shown"));
+  expect(await pane.locator("svg[role=img] .plot-beside").count()).toBe(2);
+  expect(await pane.locator("#compare-table tbody tr").count()).toBe(3);
+  await pane.getByRole("button", { name: "Show pit 3" }).click();
+  await pane.waitForFunction(() => document.getElementById("optimum-water")?.textContent?.startsWith("12.0"));
+  await pane.locator("#effort-0").fill("595");
+  await pane.locator("#effort-0").blur();
+  // a point between pit 1 and pit 2: as far between their peaks as between their curves
+  await pane.locator("#family summary").click();
+  await pane.locator("#one-point-water").fill("14");
+  await pane.locator("#one-point-dry").fill("1.725");
+  expect(await text("#one-point-answer")).toMatch(/^Peak 1\.7\d+.Mg\/m³ at 1[56]\.\d.%, from pit 1 and pit 2\.$/);
+  await pane.locator("#leave-one-out summary").click();
+  expect(await pane.locator("#leave-one-out tbody tr").count()).toBe(5);
+  await pane.locator("#write").click();
+  await pane.waitForFunction(() => document.getElementById("status")?.textContent?.startsWith("Wrote E1:N4"));
+  const done = await page.evaluate(() => bench.desk.port.read({ sheet: "Series", row: 0, column: 4, rows: 4, columns: 10 }));
+  expect(done.ok && done.value.values.map((row) => row[0])).toEqual(["test", "pit 1", "pit 2", "pit 3"]);
+  expect(done.ok && (done.value.values[3]![4] as number)).toBeCloseTo(12, 6);
+  // kept beside a part of the same sheet, and dropped again
+  await pane.locator("#keep-test").click();
+  await pane.waitForFunction(() => document.getElementById("status")?.textContent?.startsWith("Kept pit 3"));
+  await select({ sheet: "Series", row: 6, column: 1, rows: 5, columns: 2 });
+  await pane.waitForFunction(() => document.querySelectorAll("#compare-table tbody tr").length === 2);
+  expect(await pane.locator("svg[role=img] .plot-beside").count()).toBe(1);
+  await pane.getByRole("button", { name: "Drop pit 3" }).click();
+  await pane.waitForFunction(() => document.querySelectorAll(".plot-beside").length === 0);
+});
+
 test("nothing went wrong on the way", () => expect(complaints).toEqual([]));

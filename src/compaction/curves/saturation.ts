@@ -64,6 +64,16 @@ function fitted(test: CompactionTest, options: FitOptions, points: SaturationPoi
 const HOLD = 8;
 const ROUNDS = 12, CLOSE_ENOUGH = 0.05;
 
+/** A shape in the middle of the bounds with its peak near a water content. */
+const plainShape = (water: number): number[] => [0.9, 1.2 * water, 4, 0.3];
+
+/** Of two pulled fits the one that came near the place asked for and rose less. */
+function better(a: Tried | null, b: Tried | null, held: number): Tried | null {
+  if (!a || !b) return a ?? b;
+  const off = (one: Tried): number => Math.abs(one.reached - held);
+  return off(a) > 3 * off(b) + 1e-6 ? b : off(b) > 3 * off(a) + 1e-6 ? a : a.rise <= b.rise ? a : b;
+}
+
 /** A fit with its peak pulled aside: where the peak came to lie, and the root of the rise in units of the limit. */
 interface Tried { readonly reached: number; readonly rise: number; readonly at: readonly number[] }
 
@@ -86,6 +96,7 @@ function reckon(points: SaturationPoints, fit: SaturationFit, peak: { readonly w
     return sum > 0 ? Math.sqrt(sum) : null;
   };
 
+  const cornered = fit.onBound.some((one) => one);
   /** The best fit with its peak held near a place: where the peak comes to lie, and how far the fit has risen, in units of the limit. */
   const pullOnce = (which: "water" | "dry", held: number, per: number, start: readonly number[], tolerance: number): Tried | null => {
     const pulled = fitNonlinear(saturationModel(points, (at, slopes) => {
@@ -101,7 +112,10 @@ function reckon(points: SaturationPoints, fit: SaturationFit, peak: { readonly w
   /** Roughly first; a fit that seems to pass the limit is brought to its floor before that is believed. */
   const pull = (which: "water" | "dry", held: number, per: number, start: readonly number[]): Tried | null => {
     const rough = pullOnce(which, held, per, start, 1e-2);
-    return rough === null || rough.rise < 0.8 ? rough : pullOnce(which, held, per, rough.at, 1e-3);
+    if (rough === null || rough.rise < 0.8) return rough;
+    const own = pullOnce(which, held, per, rough.at, 1e-3);
+    // a fit on the bounds of its parameters may have another valley beside its own
+    return cornered ? better(own, pullOnce(which, held, per, plainShape(which === "water" ? held : peak.water), 1e-2), held) : own;
   };
 
   /** Walks outward in steps that follow the rise, each begun where the last one ended, until the limit is passed; then between the last two. */
@@ -110,8 +124,11 @@ function reckon(points: SaturationPoints, fit: SaturationFit, peak: { readonly w
     let inside: Tried = { reached: middle, rise: 0, at: [...fit.parameters] }, step = first;
     for (let round = 0; round < ROUNDS; round++) {
       const atEnd = last !== null && side * (inside.reached + side * step - last) >= 0, held = atEnd ? last : inside.reached + side * step;
-      const per = Math.max(Math.abs(held - inside.reached), 1e-9 * middle), tried = pull(which, held, per, inside.at);
-      if (tried === null || side * (tried.reached - inside.reached) < 0.1 * per) {
+      const per = Math.max(Math.abs(held - inside.reached), 1e-9 * middle), stuck = (one: Tried | null): boolean => one === null || side * (one.reached - inside.reached) < 0.1 * per;
+      let tried = pull(which, held, per, inside.at);
+      // in a corner of the bounds a rough fit stops short: to its floor, and from a plain shape
+      if (stuck(tried)) tried = better(pullOnce(which, held, per, inside.at, 1e-6), pullOnce(which, held, per, plainShape(which === "water" ? held : peak.water), 1e-6), held);
+      if (tried === null || stuck(tried)) {
         // the walk is stuck: a shorter step, or nothing more is possible
         if (step < 0.02 * first) break;
         step /= 4;

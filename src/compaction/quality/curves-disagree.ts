@@ -12,7 +12,7 @@ export const curvesDisagree = rule<CurveSubject>()({
     if (!fit || fit.otherCurves.length === 0) return;
     const own = { curve: fit.curve, water: fit.optimumWater.value, dry: fit.maxDryDensity.value };
     // a curve without a spare point swings as it likes: it widens the interval, but accuses nobody
-    const others = fit.otherCurves.filter(({ interval }) => interval !== null);
+    const others = fit.otherCurves.filter(({ judged }) => judged);
     const apart = others.filter(({ water, dry }) => Math.abs(water - own.water) > CURVES_APART.water || Math.abs(dry / own.dry - 1) > CURVES_APART.dryDensityShare);
     if (apart.length === 0) return;
     const told = ({ curve, water, dry }: typeof own): string => `${curveName(curve)} ${dry.toPrecision(4)} at ${water.toFixed(1)} %`;

@@ -28,7 +28,7 @@ export const reportedElsewhere = rule<CurveSubject>()({
   says: "the reported {what}, {reported}, lies outside what any curve that follows these points allows: {low} to {high}.",
   *look({ fit, test: { reported } }) {
     if (!fit || !reported) return;
-    for (const [what, value, { low, high }] of [["maximum dry density", reported.maxDryDensity, fit.joined.maxDryDensity], ["optimum", reported.optimumWater, fit.joined.optimumWater]] as const) {
+    for (const [what, value, { low, high }] of [["maximum dry density", reported.maxDryDensity, fit.joined().maxDryDensity], ["optimum", reported.optimumWater, fit.joined().optimumWater]] as const) {
       if (value === undefined || !((low !== null && value < low) || (high !== null && value > high))) continue;
       yield { place: { at: "whole" }, severity: "doubtful", evidence: { what, reported: value, low: low ?? "no lower bound", high: high ?? "no upper bound" } };
     }
