@@ -14,12 +14,17 @@ export interface CompactionTest {
   readonly soil?: SoilGrain | undefined;
   /** water contents of the tins of each point, where there was more than one */
   readonly tins?: readonly (readonly number[])[] | undefined;
+  /** stones left out of the test, where there were any */
+  readonly oversize?: Oversize | undefined;
   /** the peak that somebody reported from these points, and the standard it follows */
   readonly reported?: ReportedPeak | undefined;
 }
 
 export const soilGrains = ["fine", "granular"] as const;
 export type SoilGrain = (typeof soilGrains)[number];
+
+/** Oversize of the whole soil: percent of dry mass, bulk oven-dry specific gravity, water content in percent. */
+export interface Oversize { readonly percent: number; readonly gravity: number; readonly water: number }
 
 export interface ReportedPeak {
   readonly maxDryDensity?: number | undefined;

@@ -18,6 +18,10 @@ export interface Choices {
   readonly waterScatter: string;
   /** points weighed by the doubt of their readings */
   readonly weigh: boolean;
+  /** oversize as typed: percent of dry mass, bulk specific gravity, water content in percent */
+  readonly stonePercent: string;
+  readonly stoneGravity: string;
+  readonly stoneWater: string;
   /** the peak that a report gives, as typed, and its standard */
   readonly reportedDry: string;
   readonly reportedWater: string;
@@ -26,7 +30,7 @@ export interface Choices {
   readonly test: string | null;
 }
 
-export const noChoices: Choices = { corrections: {}, curve: "auto", specificGravity: null, assumed: null, waterDensity: "", soil: null, pointScatter: "", wetScatter: "", waterScatter: "", weigh: false, reportedDry: "", reportedWater: "", standard: null, test: null };
+export const noChoices: Choices = { corrections: {}, curve: "auto", specificGravity: null, assumed: null, waterDensity: "", soil: null, pointScatter: "", wetScatter: "", waterScatter: "", weigh: false, stonePercent: "", stoneGravity: "", stoneWater: "", reportedDry: "", reportedWater: "", standard: null, test: null };
 
 export const writeChoices = (choices: Choices): string => JSON.stringify({ version: 1, ...choices });
 
@@ -59,7 +63,7 @@ export function readChoices(text: string | null): Choices {
     curve: curveWords.find((word) => word === read["curve"]) ?? "auto",
     specificGravity: isText(read["specificGravity"]) ? read["specificGravity"] : null,
     assumed: typeof read["assumed"] === "boolean" ? read["assumed"] : null,
-    ...texts(read, ["waterDensity", "pointScatter", "wetScatter", "waterScatter", "reportedDry", "reportedWater"]),
+    ...texts(read, ["waterDensity", "pointScatter", "wetScatter", "waterScatter", "stonePercent", "stoneGravity", "stoneWater", "reportedDry", "reportedWater"]),
     soil: soilGrains.find((one) => one === read["soil"]) ?? null,
     standard: standardIds.find((one) => one === read["standard"]) ?? null,
     weigh: read["weigh"] === true,

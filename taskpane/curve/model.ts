@@ -1,4 +1,5 @@
-import type { CompactionTest, CurveWord, Fit, FitOutcome, NoFit, PeakPlace, ReportedPeak } from "../../src/compaction/fit";
+import type { CompactionTest, CurveWord, Fit, FitOutcome, NoFit, Oversize, PeakPlace, ReportedPeak } from "../../src/compaction/fit";
+import { wholeDryDensity, wholeWater } from "../../src/compaction/oversize";
 import { USUAL_SCATTER, type Scatter } from "../../src/compaction/scatter";
 import type { Finding, Severity } from "../../src/findings/finding";
 import { airVoidsLine, leastSpecificGravity, zeroAirVoids } from "../../src/phase/lines";
@@ -73,6 +74,8 @@ export interface Look {
   /** what is wrong with a typed scatter or a reported peak */
   readonly settingTroubles: readonly string[];
   readonly ownScatter: boolean;
+  /** the peak of the whole soil, where oversize is told */
+  readonly whole: { readonly peak: PeakPlace; readonly oversize: Oversize } | null;
 }
 
 /** A typed number with either decimal sign; undefined where it is none. */
@@ -89,7 +92,7 @@ export function lookAt(snapshot: Snapshot, choices: Choices, fitter: Fitter, aro
   const water = waterOf(unit, choices);
   const settings = settingsOf(choices);
   const base = {
-    table, choices, unit, specificGravity, water, tests, testsIn, shownTest: chosen?.name ?? null, settingTroubles: settings.troubles, ownScatter: settings.own, others: [],
+    table, choices, unit, specificGravity, water, tests, testsIn, shownTest: chosen?.name ?? null, settingTroubles: settings.troubles, ownScatter: settings.own, others: [], whole: null,
     recognised: chosen ? `${plural(tests.length, "test")} in one selection, ${chosen.name} shown: ${recognisedWords(table, unit)}` : recognisedWords(table, unit),
   };
   const nothing = { fit: null, noFit: null, findings: [], marks: [], leastSpecificGravities: [], plot: null };
@@ -103,7 +106,7 @@ export function lookAt(snapshot: Snapshot, choices: Choices, fitter: Fitter, aro
     ...(specificGravity.value === null ? {} : { specificGravity: specificGravity.value, specificGravityAssumed: specificGravity.assumed }),
     ...(choices.soil === null ? {} : { soil: choices.soil }),
   });
-  const test: CompactionTest = { ...testOf(table), ...(settings.reported ? { reported: settings.reported } : {}) };
+  const test: CompactionTest = { ...testOf(table), ...(settings.reported ? { reported: settings.reported } : {}), ...(settings.oversize ? { oversize: settings.oversize } : {}) };
   // a point that cannot be read is not quietly left out of a curve: the functions refuse such a range too
   const waits = table.problems.length > 0 || specificGravity.trouble !== null;
   const outcome = waits ? null : fitter(test, choices.curve, settings.options);
@@ -117,6 +120,7 @@ export function lookAt(snapshot: Snapshot, choices: Choices, fitter: Fitter, aro
   const marks = table.points.map((_, i) => markOf(findings.filter(({ point }) => point === i)));
   return {
     ...base, fit, noFit, findings, marks, others,
+    whole: fit && settings.oversize ? wholePeak(peakPlace(fit), settings.oversize, density) : null,
     kind: fit ? "fitted" : noFit ? "no-fit" : "unreadable",
     leastSpecificGravities: table.points.map((point, i) => marks[i] === "past-line"
       ? leastSpecificGravity.value({ waterContent: point.water, dryDensity: point.dry, waterDensity: test.waterDensity }) : null),
@@ -124,8 +128,19 @@ export function lookAt(snapshot: Snapshot, choices: Choices, fitter: Fitter, aro
   };
 }
 
+/** Water content of stones where none is told, percent: a state's copy of AASHTO T 224 takes 2. */
+export const USUAL_STONE_WATER = 2;
+
+const wholePeak = ({ water, dry }: PeakPlace, oversize: Oversize, waterDensity: number): NonNullable<Look["whole"]> => ({
+  oversize,
+  peak: {
+    dry: wholeDryDensity.value({ fineDryDensity: dry, stonePercent: oversize.percent, stoneGravity: oversize.gravity, waterDensity }),
+    water: wholeWater.value({ fineWater: water, stonePercent: oversize.percent, stoneWater: oversize.water }),
+  },
+});
+
 /** The usual scatter, or the typed one in its place; the reported peak, where one is typed. */
-function settingsOf({ pointScatter, wetScatter, waterScatter, weigh, reportedDry, reportedWater, standard }: Choices): { readonly options: FitterOptions; readonly reported: ReportedPeak | null; readonly troubles: readonly string[]; readonly own: boolean } {
+function settingsOf({ pointScatter, wetScatter, waterScatter, weigh, stonePercent, stoneGravity, stoneWater, reportedDry, reportedWater, standard }: Choices): { readonly oversize: Oversize | null; readonly options: FitterOptions; readonly reported: ReportedPeak | null; readonly troubles: readonly string[]; readonly own: boolean } {
   const troubles: string[] = [];
   const read = (text: string, name: string, from: number, to: number, usual: number | undefined): number | undefined => {
     if (text.trim() === "") return usual;
@@ -141,7 +156,10 @@ function settingsOf({ pointScatter, wetScatter, waterScatter, weigh, reportedDry
     water: read(waterScatter, "The scatter of water content", 0.02, 3, water)!,
   };
   const maxDryDensity = read(reportedDry, "The reported maximum dry density", 0.1, 4000, undefined), optimumWater = read(reportedWater, "The reported optimum", 0.1, 500, undefined);
+  const percent = read(stonePercent, "The oversize percent", 0, 95, undefined), gravity = read(stoneGravity, "The specific gravity of the oversize", 1, 6, undefined), wet = read(stoneWater, "The water content of the oversize", 0, 40, undefined);
+  if (percent !== undefined && gravity === undefined) troubles.push("Give the bulk specific gravity of the oversize too; without it nothing is corrected.");
   return {
+    oversize: percent === undefined || gravity === undefined ? null : { percent, gravity, water: wet ?? USUAL_STONE_WATER },
     options: { scatter, weigh }, troubles,
     own: weigh || scatter.curve !== curve || scatter.wetDensity !== wetDensity || scatter.water !== water,
     reported: maxDryDensity === undefined && optimumWater === undefined ? null : { maxDryDensity, optimumWater, standard: standard ?? undefined },

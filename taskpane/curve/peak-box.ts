@@ -14,11 +14,12 @@ export function peakBox(look: Look, fit: Fit): HTMLElement[] {
   const whichever = fit.otherCurves.length > 0 ? fit.joined() : null;
   const boxes: (HTMLElement | null)[] = [
     h("dl", { class: "peak" },
-      figure("Maximum dry density", "max-dry-density", fit.maxDryDensity.value.toFixed(density), unit.printed, intervalWords(fit.maxDryDensity, density), whichever && `whichever curve: ${span(whichever.maxDryDensity, density)}`),
-      figure("Optimum water content", "optimum-water", fit.optimumWater.value.toFixed(water), "%", intervalWords(fit.optimumWater, water), whichever && `whichever curve: ${span(whichever.optimumWater, water)}`)),
+      figure("Maximum dry density", "max-dry-density", fit.maxDryDensity.value.toFixed(density), unit.printed, intervalWords(fit.maxDryDensity, density), whichever && `any curve: ${span(whichever.maxDryDensity, density)}`),
+      figure("Optimum water content", "optimum-water", fit.optimumWater.value.toFixed(water), "%", intervalWords(fit.optimumWater, water), whichever && `any curve: ${span(whichever.optimumWater, water)}`)),
     h("p", { class: "at-optimum", id: "at-optimum" }, fit.saturationAtOptimum === null || fit.airVoidsAtOptimum === null
       ? "Give a specific gravity to see saturation and air voids at the optimum."
       : tied(`At the optimum: saturation ${fit.saturationAtOptimum.toFixed(0)} %, air voids ${fit.airVoidsAtOptimum.toFixed(1)} %.`)),
+    look.whole === null ? null : h("p", { class: "joined", id: "whole-soil" }, tied(`Whole soil with ${look.whole.oversize.percent} % oversize of ${look.whole.oversize.gravity} at ${look.whole.oversize.water} % water: ${look.whole.peak.dry.toFixed(density)} ${unit.printed} at ${look.whole.peak.water.toFixed(water)} %.`)),
     look.shownTest === null ? null : h("p", { class: "quiet" }, `Shown: ${look.shownTest}.`),
     fit.otherCurves.length > 0 ? h("p", { class: "joined", id: "joined" }, tied(joinedWords(look, fit))) : null,
     h("p", { class: "quiet", id: "why-curve" }, h("b", {}, CURVE_NAMES[fit.curve]), tied(`: ${sentence(fit.reason)} ${sentence(fit.intervalNote)}`)),

@@ -4,7 +4,7 @@ import { WATER_KG_M3_AT_20 } from "../../src/units/water-density";
 import { cellName } from "../../src/workbook/address";
 import { h } from "../parts/dom";
 import type { Choices } from "./choices";
-import { CURVE_NAMES, typedNumber, type Look } from "./model";
+import { CURVE_NAMES, typedNumber, USUAL_STONE_WATER, type Look } from "./model";
 
 /** The round figure for the density of water that sheets use, by unit. Common practice, no published source. */
 const CONVENTION: Readonly<Record<string, string>> = { "Mg/m3": "1", "kg/m3": "1000", "kN/m3": "9.81", "lb/ft3": "62.4", "lb/yd3": "1685" };
@@ -53,7 +53,7 @@ export function settingsBox(look: Look, choose: (change: Partial<Choices>) => vo
   ];
 }
 
-type TextChoice = "pointScatter" | "wetScatter" | "waterScatter" | "reportedDry" | "reportedWater";
+type TextChoice = "stonePercent" | "stoneGravity" | "stoneWater" | "pointScatter" | "wetScatter" | "waterScatter" | "reportedDry" | "reportedWater";
 
 /** What most tests do not need: the grain of the soil, stated scatter, and a reported peak to hold against the curve. */
 function moreBox(look: Look, choose: (change: Partial<Choices>) => void): HTMLElement {
@@ -69,9 +69,12 @@ function moreBox(look: Look, choose: (change: Partial<Choices>) => void): HTMLEl
     h("option", { value: "", selected: choices.standard === null }, "not told"), ...standardIds.map((id) => h("option", { value: id, selected: choices.standard === id }, id)));
   const weigh = h("input", { type: "checkbox", id: "weigh", checked: choices.weigh, onchange: () => choose({ weigh: weigh.checked }) });
   const { curve, wetDensity, water } = USUAL_SCATTER;
-  return h("details", { id: "more" }, h("summary", {}, "Soil, scatter, reported peak"),
+  return h("details", { id: "more" }, h("summary", {}, "Soil, oversize, scatter, reported peak"),
     h("div", { class: "settings" },
       h("div", { class: "field" }, h("label", { for: "soil" }, "Grain of the soil"), soil),
+      field("stonePercent", "Oversize, % of dry mass", "none"),
+      field("stoneGravity", "Bulk gravity of the oversize", "none"),
+      field("stoneWater", "Water in the oversize, %", String(USUAL_STONE_WATER)),
       field("wetScatter", "Scatter of wet density, %", String(100 * wetDensity)),
       field("waterScatter", "Scatter of water content, points", String(water)),
       field("pointScatter", "Scatter about the curve, %", String(100 * curve)),

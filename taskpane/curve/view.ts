@@ -68,8 +68,11 @@ export class CurveView implements View {
     if (look === null || look.kind === "nothing") return refill(this.table, ...emptyState(instead ?? "The selection holds no laboratory test."));
     const { table } = look;
     const { sheet } = table.area;
-    // what was unfolded belongs to the table before
-    if (areaName(table.area) !== this.tableShown) this.table.replaceChildren();
+    // what was unfolded, and where to write, belong to the table before
+    if (areaName(table.area) !== this.tableShown) {
+      this.table.replaceChildren();
+      this.writeAt = "";
+    }
     this.tableShown = areaName(table.area);
     refill(this.table,
       h("p", { class: "recognised", id: "recognised" }, look.recognised || `${rangeName(table.area)}: not read yet`),

@@ -6,6 +6,7 @@ import { kindOfCurveRule } from "./kind-of-curve";
 import { missesPoints } from "./misses-points";
 import { notBracketed } from "./not-bracketed";
 import { outlier } from "./outlier";
+import { oversizeLimits } from "./oversize-limits";
 import { pastLine } from "./past-line";
 import { repeatedPoints } from "./repeated-points";
 import { highestPointReported, reportedElsewhere, reportingPrecision } from "./reported-peak";
@@ -19,5 +20,5 @@ import { wetLeg } from "./wet-leg";
 /** Everything that is looked at in a compaction test, in the order in which equals are told. */
 export const curveRules = [
   pastLine, missesPoints, kindOfCurveRule, outlier, tinsDiffer, notBracketed, curvePastLine, reportedElsewhere, saturationAtOptimum, influentialPoint, tooFewPoints, gap,
-  standsAbove, curvesDisagree, wetLeg, repeatedPoints, highestPointReported, reportingPrecision, gravityImplausible, gravityAssumed,
+  standsAbove, curvesDisagree, wetLeg, repeatedPoints, highestPointReported, reportingPrecision, oversizeLimits, gravityImplausible, gravityAssumed,
 ] as const;

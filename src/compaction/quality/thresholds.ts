@@ -38,3 +38,6 @@ export const TINS_APART = { points: 0.5, share: 0.05 } as const;
 
 /** Distance in its own doubts beyond which a point of a small test is stray: the chance of a good one is 1 in 1000. Common practice. */
 export const STRAY = 3.29;
+
+/** Oversize, percent of dry mass: below the least no correction; up to 40 % on the 4.75 mm sieve, 30 % on the 19 mm sieve (AASHTO T 99 and T 224, a state's copy of the method). */
+export const OVERSIZE = { least: 5, mostFine: 40, mostCoarse: 30 } as const;

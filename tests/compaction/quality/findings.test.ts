@@ -98,6 +98,13 @@ const cases: Readonly<Record<string, { fires: readonly Case[]; silent: readonly 
     ],
     silent: [{ test: { ...good, reported: { maxDryDensity: 1.85, optimumWater: 14, standard: "BS 1377-4" } } }, { test: { ...good, reported: { maxDryDensity: 1.853 } } }, { test: { ...good, reported: { optimumWater: 14.1, standard: "ASTM D698" } } }],
   },
+  "oversize-limits": {
+    fires: [
+      { test: { ...good, oversize: { percent: 3, gravity: 2.65, water: 2 } }, places: ["whole"], says: /^3 % oversize is below 5 %/ }, { test: { ...good, oversize: { percent: 35, gravity: 2.65, water: 2 } }, places: ["whole"], says: /where it was retained on the 19 mm sieve/ },
+      { test: { ...good, oversize: { percent: 45, gravity: 2.65, water: 2 } }, places: ["whole"], says: /up to 40 % on the 4\.75 mm sieve/ },
+    ],
+    silent: [{ test: good }, { test: { ...good, oversize: { percent: 20, gravity: 2.65, water: 2 } } }, { test: { ...good, oversize: { percent: 0, gravity: 2.65, water: 2 } } }],
+  },
   "gravity-implausible": { fires: [{ test: { ...good, specificGravity: 3.4 }, places: ["whole"] }, { test: { ...good, specificGravity: 2.3 }, places: ["whole"] }], silent: [{ test: good }, { test: of(waters, dries) }] },
   "gravity-assumed": { fires: [{ test: { ...good, specificGravityAssumed: true }, places: ["whole"] }], silent: [{ test: good }, { test: of(waters, dries, { specificGravityAssumed: true }) }] },
 };

@@ -1,7 +1,7 @@
 import { noChoices, readChoices, writeChoices, type Choices } from "../../../taskpane/curve/choices";
 
 test("choices come back as they were written", () => {
-  const choices: Choices = { corrections: { orientation: "across", roles: { 1: "wetDensity" }, units: { 1: "kg/m3" } }, curve: "cubic", specificGravity: "2.68", assumed: true, waterDensity: "1", soil: "fine", pointScatter: "0.4", wetScatter: "", waterScatter: "0,5", weigh: true, reportedDry: "1.85", reportedWater: "14", standard: "BS 1377-4", test: "A" };
+  const choices: Choices = { corrections: { orientation: "across", roles: { 1: "wetDensity" }, units: { 1: "kg/m3" } }, curve: "cubic", specificGravity: "2.68", assumed: true, waterDensity: "1", soil: "fine", pointScatter: "0.4", wetScatter: "", waterScatter: "0,5", weigh: true, stonePercent: "10", stoneGravity: "2.73", stoneWater: "", reportedDry: "1.85", reportedWater: "14", standard: "BS 1377-4", test: "A" };
   expect(readChoices(writeChoices(choices))).toEqual(choices);
 });
 

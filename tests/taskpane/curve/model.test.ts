@@ -54,6 +54,36 @@ describe("points past the zero-air-voids line", () => {
   });
 });
 
+describe("soil, oversize, scatter and a reported peak", () => {
+  test("the whole soil's peak (exercise of a UK soil-mechanics text: 1.97, 10 % gravel of 2.73 give 2.03 and 11 %)", () => {
+    const A = [["w", 10, 11, 12, 13, 14], ["Dry density (Mg/m³)", 1.8573, 1.9595, 1.9723, 1.969, 1.9254]];
+    const { whole } = look(A, { curve: "top three", stonePercent: "10", stoneGravity: "2.73", stoneWater: "0", waterDensity: "1" });
+    expect(whole!.peak.dry.toFixed(2)).toBe("2.03");
+    expect(Math.round(whole!.peak.water)).toBe(11);
+    expect(look(A, { stonePercent: "10" }).whole).toBeNull();
+    expect(look(A, { stonePercent: "10" }).settingTroubles[0]).toMatch(/bulk specific gravity of the oversize/);
+  });
+  test("a scatter of one's own widens the interval, and says that the functions do not know it", () => {
+    const usual = look(P), wide = look(P, { wetScatter: "0,8", waterScatter: "0.6" });
+    expect(usual.ownScatter).toBe(false);
+    expect(wide.ownScatter).toBe(true);
+    expect(wide.fit!.maxDryDensity.high ?? Infinity).toBeGreaterThan(usual.fit!.maxDryDensity.high!);
+    expect(look(P, { wetScatter: "lots" }).settingTroubles[0]).toMatch(/The scatter of wet density "lots" is not a number between 0.05 and 5: the usual 0.4 is used/);
+  });
+  test("a reported peak is held against the curve, by the standard's own steps", () => {
+    expect(look(P, { reportedDry: "2.01", reportedWater: "11.0", standard: "AS 1289" }).findings.map(({ id }) => id)).toEqual(["too-few-points"]);
+    expect(look(P, { reportedDry: "2.15", reportedWater: "11.2", standard: "AS 1289" }).findings.map(({ id }) => id).sort()).toEqual(["reported-elsewhere", "reporting-precision", "too-few-points"]);
+  });
+  test("tins that differ are told with the cell of their point", () => {
+    const rows = [["Wet density (Mg/m³)", "Wet + tin (g)", "Dry + tin (g)", "Tin (g)", "Wet + tin (g)", "Dry + tin (g)", "Tin (g)"], ...[9, 10.5, 12, 13.5, 15].map((w, i) => {
+      const wet = (1.85 - 0.005 * (w - 12.2) ** 2) * (1 + w / 100), dry = 100, second = w + (i === 2 ? 1.4 : 0.1);
+      return [Number(wet.toFixed(4)), 20 + dry * (1 + w / 100), 20 + dry, 20, 21 + dry * (1 + second / 100), 21 + dry, 21];
+    })];
+    const seen = lookAt(sheet(rows), noChoices, fitTest);
+    expect(seen.findings.filter(({ id }) => id === "tins-differ").map(({ point }) => point)).toEqual([2]);
+  });
+});
+
 describe("specific gravity and density of water", () => {
   test("either decimal sign will do", () => expect(look(P, { specificGravity: "2,70" }).specificGravity.value).toBe(2.7));
   test.each(["abc", "0.5", "27"])("%s is refused, and the curve waits", (text) => {
