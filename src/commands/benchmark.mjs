@@ -1,5 +1,6 @@
-// npm run bench:NAME runs tests/benchmarks/NAME.ts.
-import { existsSync } from "node:fs";
+// npm run bench:NAME bundles tests/benchmarks/NAME.ts as it ships (tsx would keep the name of every closure, at a cost) and runs it.
+import { spawnSync } from "node:child_process";
+import { existsSync, rmSync } from "node:fs";
 import { install } from "./install.mjs";
 import { isBuilt } from "./stamp.mjs";
 import { root, tool } from "./tool.mjs";
@@ -12,4 +13,9 @@ if (!name || !existsSync(root + file)) {
 }
 install();
 if (!isBuilt()) tool("webpack/bin/webpack.js");
-tool("tsx/dist/cli.mjs", [file, ...rest]);
+const { buildSync } = await import("esbuild");
+const built = `${root}tests/benchmarks/.${name}.mjs`;
+buildSync({ entryPoints: [root + file], outfile: built, bundle: true, platform: "node", format: "esm", packages: "external", logLevel: "warning" });
+const { status } = spawnSync(process.execPath, [built, ...rest], { stdio: "inherit" });
+rmSync(built, { force: true });
+process.exit(status ?? 1);

@@ -43,7 +43,7 @@ export function fitNonlinear(model: LeastSquaresModel, start: readonly number[],
 
   let here = Float64Array.from(start, clamp), there = new Float64Array(p);
   let residuals = new Float64Array(n), trialResiduals = new Float64Array(n);
-  const jacobian = new Float64Array(n * p);
+  let jacobian = new Float64Array(n * p), trialJacobian = new Float64Array(n * p);
   const scale = new Float64Array(p), gradient = new Float64Array(p), step = new Float64Array(p);
   const free: number[] = [];
   const workspace = new Workspace(n, p);
@@ -93,7 +93,8 @@ export function fitNonlinear(model: LeastSquaresModel, start: readonly number[],
         moved += by * by;
       }
       moved = Math.sqrt(moved);
-      model.evaluate(there, trialResiduals, null);
+      // derivatives with it: most trials are taken, and then need them
+      model.evaluate(there, trialResiduals, trialJacobian);
       evaluations++;
       const trial = squared(trialResiduals);
       const predicted = workspace.predicted(jacobian, residuals, here, there);
@@ -109,8 +110,8 @@ export function fitNonlinear(model: LeastSquaresModel, start: readonly number[],
       if (ratio > ACCEPT && trial < sum) {
         [here, there] = [there, here];
         [residuals, trialResiduals] = [trialResiduals, residuals];
+        [jacobian, trialJacobian] = [trialJacobian, jacobian];
         sum = trial;
-        model.evaluate(here, residuals, jacobian);
         if (small || (predicted <= tolerance * tolerance * sum && gained <= tolerance * tolerance)) converged = true;
         break;
       }
@@ -241,29 +242,40 @@ class Workspace {
 
   /** A step of at most the radius; returns the damping that held it there (0: the plain Gauss-Newton step fitted). */
   step(step: Float64Array, scale: Float64Array, free: readonly number[], radius: number, previous: number): number {
-    const { q, triangle: t, scaledStep } = this;
+    const { q } = this;
     let singular = false;
     for (let k = 0; k < q; k++) if (Math.abs(this.diagonal[k]!) <= 1e-14 * scale[free[k]!]!) singular = true;
-    if (!singular && this.solve(0, step, scale, free) <= radius) return 0;
     let damping = previous > 0 ? previous : 1e-3, low = 0, high = Infinity;
+    if (!singular) {
+      const length = this.solve(0, step, scale, free);
+      if (length <= radius) return 0;
+      // Newton from no damping never oversteps: a sure lower bound, and a good start
+      low = this.newton(0, length, step, scale, free, radius);
+      damping = Math.max(low, previous > 0 ? Math.min(previous, 2 * low) : low);
+    }
     for (let round = 0; round < 60; round++) {
       const length = this.solve(damping, step, scale, free);
       if (length > 0.9 * radius && length <= 1.1 * radius) break;
       if (length > radius) low = Math.max(low, damping); else high = Math.min(high, damping);
       // a singular Jacobian may leave even the least damped step inside the region
       if (high < 1e-30) break;
-      // Newton on 1/length - 1/radius: the derivative comes from one more triangular solve
-      let slope = 0;
-      for (let k = 0; k < q; k++) {
-        let sum = scale[free[k]!]! ** 2 * step[free[k]!]!;
-        for (let j = 0; j < k; j++) sum -= t[j * q + k]! * scaledStep[j]!;
-        scaledStep[k] = t[k * q + k] === 0 ? 0 : sum / t[k * q + k]!;
-        slope += scaledStep[k]! ** 2;
-      }
-      const newton = slope > 0 ? damping + (length - radius) / radius * length * length / slope : 0;
+      const newton = this.newton(damping, length, step, scale, free, radius);
       damping = newton > low && newton < high ? newton : high === Infinity ? Math.max(damping * 10, 1e-300) : low === 0 ? high * 0.1 : Math.sqrt(low * high);
     }
     return damping;
+  }
+
+  /** Newton's next damping on 1/length − 1/radius; the derivative comes from one more triangular solve. */
+  private newton(damping: number, length: number, step: Float64Array, scale: Float64Array, free: readonly number[], radius: number): number {
+    const { q, triangle: t, scaledStep } = this;
+    let slope = 0;
+    for (let k = 0; k < q; k++) {
+      let sum = scale[free[k]!]! ** 2 * step[free[k]!]!;
+      for (let j = 0; j < k; j++) sum -= t[j * q + k]! * scaledStep[j]!;
+      scaledStep[k] = t[k * q + k] === 0 ? 0 : sum / t[k * q + k]!;
+      slope += scaledStep[k]! ** 2;
+    }
+    return slope > 0 ? damping + (length - radius) / radius * length * length / slope : 0;
   }
 
   /** How far the linear model says the sum of squares falls along the step actually taken. */
