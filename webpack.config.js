@@ -74,7 +74,7 @@ const bundle = (name, target) => ({
 module.exports = [
   {
     ...bundle("functions", "es2020"),
-    entry: { functions: functionFiles },
+    entry: { functions: "./functions/index.ts" },
     output: { path: dist, filename: "functions.js" },
     // the metadata plugin rewrites its files while they are loaded; a cache would skip that
     cache: false,

@@ -20,6 +20,8 @@ const cases: Readonly<Record<string, { fires: readonly Case[]; silent: readonly 
       { test: of(waters, [1.771, 1.827, 1.853, 1.829, 1.84], { specificGravity: 2.7 }), places: [4], says: /1\.84 at 18 % lies past .* from a specific gravity of 2\.752 up/ },
       { test: of(waters, [1.771, 1.827, 1.853, 1.829, 1.84], { specificGravity: 2.7, specificGravityAssumed: true }), places: [4], says: /assumed specific gravity/ },
       { test: publishedTest("G"), places: [2, 3, 4] },
+      // two decimals: 1.87 may be 1.865, which the line still allows at 16.55 %, 2.7 and 1
+      { test: of([10, 12, 14, 16.6, 18], [1.77, 1.83, 1.86, 1.87, 1.77], { specificGravity: 2.7 }), places: [3], says: /within the rounding of its figures the point may lie on the line/ },
     ],
     silent: [{ test: good }, { test: of(waters, [1.771, 1.827, 1.853, 1.829, 1.84]) }, { test: of(waters, [1.771, 1.827, 1.853, 1.829, 1 / (0.18 + 1 / 2.7) * 1.0015], { specificGravity: 2.7 }) }],
   },
