@@ -8,7 +8,7 @@ const Css = require("mini-css-extract-plugin");
 const Minimizer = require("minimizer-webpack-plugin");
 
 const dist = path.resolve(__dirname, "dist");
-const functionFiles = ["mass-and-volume", "compaction", "beyond-one-curve", "field", "earthwork"].map((family) => `./functions/${family}.ts`);
+const functionFiles = ["mass-and-volume", "compaction", "beyond-one-curve", "field", "lots", "earthwork"].map((family) => `./functions/${family}.ts`);
 
 /** What the metadata generator cannot say: error values may reach our functions, and no rich data types do. */
 class FinishMetadata {

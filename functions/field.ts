@@ -1,4 +1,6 @@
 import { holeWetColumn, relativeCompactionColumn, relativeDensityColumn, sandConeColumn, waterGapColumn, waterRatioColumn } from "../src/worksheet/field";
+import { gaugeDry, gaugeOffset, sandDensityColumn, sandInConeColumn } from "../src/worksheet/field-readings";
+import { passChance } from "../src/worksheet/lots";
 import { cells, reply } from "./reply";
 
 /**
@@ -68,4 +70,69 @@ export function sandCone(soilMass: any[][], sandUsed: any[][], sandInCone: any[]
  */
 export function holeWet(soilMass: any[][], holeVolume: any[][]): any[][] {
   return reply(() => holeWetColumn(cells(soilMass), cells(holeVolume)));
+}
+
+/**
+ * Bulk density of the sand for sand replacement, from filling a container of known volume.
+ * @customfunction SANDDENS
+ * @param full Mass of the container filled with sand. A cell or a column.
+ * @param empty Mass of the empty container.
+ * @param volume Volume of the container.
+ * @returns Density of the sand: mass over volume, in their units.
+ */
+export function sandDens(full: any[][], empty: any[][], volume: any[][]): any[][] {
+  return reply(() => sandDensityColumn(cells(full), cells(empty), cells(volume)));
+}
+
+/**
+ * Mass of sand that stays in cone and plate, from pouring on a flat surface.
+ * @customfunction CONESAND
+ * @param before Mass of bottle, cone and sand before pouring. A cell or a column.
+ * @param after Mass of bottle, cone and sand after pouring.
+ * @returns Mass of sand in the cone, in the unit of the weighings.
+ */
+export function coneSand(before: any[][], after: any[][]): any[][] {
+  return reply(() => sandInConeColumn(cells(before), cells(after)));
+}
+
+/**
+ * Dry density in place from a nuclear gauge. A gauge's water is biased in some soils (mica, gypsum, organic matter): have the offset from oven-dried samples.
+ * @customfunction GAUGEDRY
+ * @param wetDensity Wet density by the gauge. A cell or a column.
+ * @param gaugeWater Water by the gauge: mass a volume in the unit of the density, or percent with the kind "percent".
+ * @param [offset] Correction for the soil, added to the gauge's water, in its own unit: see GAUGEOFFSET. Left out: none.
+ * @param [kind] What the gauge shows as water: "mass" or "percent". Left out: "mass".
+ * @returns Dry density, in the unit of the wet density.
+ */
+export function gaugeDryDensity(wetDensity: any[][], gaugeWater: any[][], offset?: any[][], kind?: any[][]): any[][] {
+  return reply(() => gaugeDry(cells(wetDensity), cells(gaugeWater), cells(offset), cells(kind)));
+}
+
+/**
+ * Mean offset of a gauge's water for one soil, from spots where the water was also had by oven. Ten spots are commonly asked for.
+ * @customfunction GAUGEOFFSET
+ * @param wetDensity Wet densities by the gauge. A column.
+ * @param gaugeWater Water by the gauge at the same spots: mass a volume, or percent with the kind "percent".
+ * @param ovenWater Water contents by oven at the same spots, percent of dry mass.
+ * @param [kind] What the gauge shows as water: "mass" or "percent". Left out: "mass".
+ * @returns Offset to add to the gauge's water, in its own unit.
+ */
+export function gaugeWaterOffset(wetDensity: any[][], gaugeWater: any[][], ovenWater: any[][], kind?: any[][]): any[][] {
+  return reply(() => gaugeOffset(cells(wetDensity), cells(gaugeWater), cells(ovenWater), cells(kind)));
+}
+
+/**
+ * Probability that the true relative compaction at the spot meets its limit, from one test and its uncertainty. It knows nothing of a bias that all tests share.
+ * @customfunction PASSCHANCE
+ * @param dry Field dry density. A cell or a column.
+ * @param maxDry Maximum dry density of the reference test, same unit.
+ * @param minRelComp Limit of relative compaction, percent, such as 95.
+ * @param sdDry Standard uncertainty of one field test, in the unit of the densities.
+ * @param [sdMax] Standard uncertainty of the maximum dry density, same unit. Left out: none.
+ * @param [lotMean] Mean dry density of the lot; with its spread the estimate is drawn towards it.
+ * @param [lotSd] Standard deviation of the true dry density over the lot.
+ * @returns Probability, 0 to 1.
+ */
+export function passChanceOfTest(dry: any[][], maxDry: any[][], minRelComp: any[][], sdDry: any[][], sdMax?: any[][], lotMean?: any[][], lotSd?: any[][]): any[][] {
+  return reply(() => passChance(cells(dry), cells(maxDry), cells(minRelComp), cells(sdDry), cells(sdMax), cells(lotMean), cells(lotSd)));
 }

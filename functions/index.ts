@@ -3,4 +3,5 @@ export * from "./mass-and-volume";
 export * from "./compaction";
 export * from "./beyond-one-curve";
 export * from "./field";
+export * from "./lots";
 export * from "./earthwork";

@@ -1,4 +1,4 @@
-import { CellError, type Block, type Cell, type ErrorCode } from "../src/worksheet/cell";
+import { CellError, refusal, type Block, type Cell, type ErrorCode } from "../src/worksheet/cell";
 
 const HOST_CODE = {
   "#VALUE!": "invalidValue", "#N/A": "notAvailable", "#NUM!": "invalidNumber", "#DIV/0!": "divisionByZero",
@@ -28,9 +28,12 @@ export function cells(given: unknown): Block | null {
   return error ? block.map((row) => row.map(fromHost)) : block;
 }
 
+/** The last net: figures so large that their arithmetic overflows. */
+const NO_ANSWER = refusal("no answer can be had from these values.");
+
 /** The one seam between our cells and the host's: errors become the host's own, a blank is the empty text (null would show as 0). */
 export function reply(answer: () => Cell[][] | CellError): any[][] {
   const result = answer();
   if (result instanceof CellError) throw toHost(result);
-  return result.map((row) => row.map((cell) => cell instanceof CellError ? toHost(cell) : cell ?? ""));
+  return result.map((row) => row.map((cell) => cell instanceof CellError ? toHost(cell) : typeof cell === "number" && !Number.isFinite(cell) ? toHost(NO_ANSWER) : cell ?? ""));
 }

@@ -1,5 +1,6 @@
 import "./pane.css";
 import { fitTest } from "../src/compaction/fit-test";
+import { recordRules } from "../src/compaction/quality/record";
 import { CurveController } from "./curve/controller";
 import { CurveView } from "./curve/view";
 import { findHost } from "./host";
@@ -11,7 +12,7 @@ async function start(): Promise<void> {
   const host = await findHost();
   if (host === null) return showOutside(pane);
   const view: CurveView = new CurveView(pane, () => controller);
-  const controller = new CurveController(host, view, fitTest);
+  const controller = new CurveController(host, view, (test, word, options) => fitTest(test, word, { ...options, rules: recordRules }));
   await controller.start();
   document.documentElement.dataset["ready"] = "true";
 }

@@ -1,4 +1,4 @@
-import { findAll } from "../findings/finding";
+import { findAll, type Rule } from "../findings/finding";
 import { airVoidsOfPoint, degreeOfSaturation } from "../phase/lines";
 import { curveOf } from "./curves";
 import { residualsOf, spareOf, type Curve, type FitOptions, type FittedCurve } from "./curves/curve";
@@ -13,19 +13,21 @@ import { curveScatter, USUAL_SCATTER, type Scatter } from "./scatter";
 import { notOnePeak, tooLittle, whyNoPeak } from "./shape";
 import { joinedInterval, othersThan, TELLING, weighCurves, type Weighing } from "./weighing";
 
+interface TestOptions extends FitOptions { readonly rules: readonly Rule<CurveSubject>[] }
+
 /**
  * Fits a compaction test. Every number that is said of the test anywhere comes from the object this returns.
  * `auto` weighs the curves (weighing.ts); of curves within a difference that tells nothing the plainest is taken.
  * Densities, the density of water and the results are in one unit; water contents in percent of dry mass.
  */
-export function fitTest(test: CompactionTest, word: CurveWord, { scatter = USUAL_SCATTER, weigh = false }: { readonly scatter?: Scatter; readonly weigh?: boolean } = {}): FitOutcome {
-  const options: FitOptions = { scatter, weigh };
+export function fitTest(test: CompactionTest, word: CurveWord, { scatter = USUAL_SCATTER, weigh = false, rules = curveRules }: { readonly scatter?: Scatter; readonly weigh?: boolean; readonly rules?: readonly Rule<CurveSubject>[] } = {}): FitOutcome {
+  const options: TestOptions = { scatter, weigh, rules };
   const little = tooLittle(test);
   if (little) return refuse(test, options, little);
   return word === "auto" ? fitByWeighing(test, options) : fitAsAsked(test, curveOf(word), options);
 }
 
-function fitAsAsked(test: CompactionTest, curve: Curve, options: FitOptions): FitOutcome {
+function fitAsAsked(test: CompactionTest, curve: Curve, options: TestOptions): FitOutcome {
   const found = curve.fit(test, options);
   if (typeof found === "object") return { ok: true, fit: finish(test, options, found, weighCurves(test, options, found), "as asked for") };
   if (found === "not-enough" && curve.id === "saturation" && test.specificGravity === undefined)
@@ -43,7 +45,7 @@ function opensUpward({ waters, dries }: CompactionTest): boolean {
   return contrast.reduce((sum, c, i) => sum + c * dries[i]!, 0) >= 0;
 }
 
-function fitByWeighing(test: CompactionTest, options: FitOptions): FitOutcome {
+function fitByWeighing(test: CompactionTest, options: TestOptions): FitOutcome {
   const weighing = weighCurves(test, options);
   if (test.waters.length === 3) {
     const found = curveOf("top three").fit(test, options);
@@ -79,7 +81,7 @@ function fitByWeighing(test: CompactionTest, options: FitOptions): FitOutcome {
 const shown = (value: number): string => String(Number(value.toPrecision(3)));
 const percent = (share: number): string => String(Number((100 * share).toPrecision(3)));
 
-function finish(test: CompactionTest, options: FitOptions, fitted: FittedCurve, weighing: Weighing, reason: string): Fit {
+function finish(test: CompactionTest, options: TestOptions, fitted: FittedCurve, weighing: Weighing, reason: string): Fit {
   const spare = spareOf(fitted), { peak, at } = fitted, reckoning = fitted.reckon(), otherCurves = othersThan(fitted, weighing);
   const { specificGravity, waterDensity } = test;
   const atPeak = specificGravity === undefined ? undefined : { dryDensity: peak.dry, waterContent: peak.water, specificGravity, waterDensity };
@@ -104,7 +106,7 @@ function finish(test: CompactionTest, options: FitOptions, fitted: FittedCurve, 
     },
     findings: [],
   };
-  return { ...fit, findings: findAll(curveRules, subject(test, options, fit)) };
+  return { ...fit, findings: findAll(options.rules, subject(test, options, fit)) };
 }
 
 const positive = (value: number): number | null => value > 0 && Number.isFinite(value) ? value : null;
@@ -119,7 +121,7 @@ function intervalNote(scatter: Scatter, widening: number, spare: number, { low, 
   return `${from}.`;
 }
 
-function subject(test: CompactionTest, options: FitOptions, fit: Fit | null): CurveSubject {
+function subject(test: CompactionTest, options: TestOptions, fit: Fit | null): CurveSubject {
   const three = curveOf("top three").fit(test, options);
   const highest = test.dries.indexOf(Math.max(...test.dries));
   return {
@@ -130,5 +132,5 @@ function subject(test: CompactionTest, options: FitOptions, fit: Fit | null): Cu
   };
 }
 
-const refuse = (test: CompactionTest, options: FitOptions, { why, says }: Pick<NoFit, "why" | "says">): FitOutcome =>
-  ({ ok: false, noFit: { why, says, findings: findAll(curveRules, subject(test, options, null)) } });
+const refuse = (test: CompactionTest, options: TestOptions, { why, says }: Pick<NoFit, "why" | "says">): FitOutcome =>
+  ({ ok: false, noFit: { why, says, findings: findAll(options.rules, subject(test, options, null)) } });

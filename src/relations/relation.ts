@@ -1,35 +1,25 @@
 import { compile } from "../formula/compile";
-import { rangeOver, type Interval } from "../formula/interval";
 import type { Names } from "../formula/names";
 import { namesIn, parse, type Formula } from "../formula/parse";
 import { solveFor } from "../formula/solve";
-import { evaluate, numbers, slopes } from "../formula/world";
-import { write } from "../formula/write";
-import { quantity, type QuantityId } from "./quantities";
+import { evaluate, numbers } from "../formula/world";
+import type { QuantityId } from "./quantities";
 
 /** Where a relation stands in print. */
 export interface Source { readonly title: string; readonly clause?: string }
 
-type Inputs<In extends QuantityId, T> = Readonly<Record<In, T>>;
+export type Inputs<In extends QuantityId, T> = Readonly<Record<In, T>>;
 
 /** One fact of the trade: a formula text, the quantity it gives, and its source. Everything else is read off the text. */
 export interface Relation<Out extends QuantityId, In extends QuantityId> {
   readonly gives: Out;
   /** the inputs in the order in which they first stand in the text */
   readonly from: readonly In[];
-  /** the formula with plain signs; it parses again */
-  readonly text: string;
   readonly formula: Formula;
   readonly source: Source;
   value(inputs: Inputs<In, number>): number;
   /** the same as a plain function of positional inputs in the order asked for, for columns and inner loops */
   by(...order: readonly In[]): (...inputs: number[]) => number;
-  /** the exact range over rounding intervals */
-  range(box: Inputs<In, Interval>): Interval;
-  /** the derivative with respect to one input */
-  slope(of: In, at: Inputs<In, number>): number;
-  /** symbols, then the cell's own numbers in their place */
-  working(shown: Inputs<In, string>): string;
   /** the same fact solved for one of its inputs */
   solvedFor<To extends In>(wanted: To): Relation<To, Exclude<In, To> | Out>;
 }
@@ -45,16 +35,10 @@ export function relation<Out extends QuantityId, const Text extends string>(
 
 function fromFormula<Out extends QuantityId, In extends QuantityId>(gives: Out, formula: Formula, source: Source): Relation<Out, In> {
   const from = namesIn(formula) as In[];
-  const withSlopes = slopes(numbers);
-  const symbolOf = (id: string): string => quantity(id as QuantityId).symbol;
   return {
     gives, from, formula, source,
-    text: write(formula, (name) => name, "plain"),
     value: (inputs) => evaluate(formula, numbers, (name) => inputs[name as In]),
     by: (...order) => compile(formula, order),
-    range: (box) => rangeOver(formula, box),
-    slope: (of, at) => evaluate(formula, withSlopes, (name) => ({ value: at[name as In], slope: name === of ? 1 : 0 })).slope,
-    working: (shown) => `${symbolOf(gives)} = ${write(formula, symbolOf)} = ${write(formula, (name) => shown[name as In])}`,
     solvedFor: (wanted) => fromFormula(wanted, solveFor(formula, wanted, gives), source),
   };
 }

@@ -1,5 +1,10 @@
 import { gainAtEffort, optimumAtEffort, optimumFromPlasticLimit, standardOptimumFromPlasticLimit, standardUnitWeightFromPlasticLimit, unitWeightFromOptimum } from "../../src/compaction/correlations";
 import { convertedWetDensity, gapOfRapidMethod } from "../../src/compaction/rapid-method";
+import { dryingDaysSi, dryingDaysUs, dryShareOfBlend, moistShareOfBlend, sprayGallons, sprayLitres, waterOfBlend } from "../../src/earthwork/conditioning";
+import { curvatureCoefficient, finesThatFill, packedDensity, uniformityCoefficient } from "../../src/earthwork/packing";
+import { rollRateSi, rollRateUs } from "../../src/earthwork/rolling";
+import { dryDensityByGauge, dryDensityByGaugePercent, offsetOfGauge, offsetOfGaugePercent } from "../../src/field/gauge";
+import { densityOfSand, sandInConeFromWeighing } from "../../src/field/sand-replacement";
 import { compactiveEffort } from "../../src/compaction/effort";
 import { mouldVolumeFromMeasures, waterForBatch, wetDensityInMould } from "../../src/compaction/mould";
 import { fineDryDensity, fineWater, wholeDryDensity, wholeWater } from "../../src/compaction/oversize";
@@ -132,6 +137,25 @@ export const figures: readonly Figure[] = [
   { relation: as(standardUnitWeightFromPlasticLimit), inputs: { plasticLimit: 20 }, says: "16.86", source: "Sridharan and Nagaraj (2005), PL 20; recomputed" },
   { relation: as(optimumAtEffort), inputs: { optimumWater: 20, liquidLimit: 45, compactiveEffort: 592.5, otherEffort: 2693.3 }, says: "14.87", source: "Blotz and others (1998), LL 45, standard to modified: -5.1 points; derived to two digits" },
   { relation: as(gainAtEffort), inputs: { liquidLimit: 45, compactiveEffort: 592.5, otherEffort: 2693.3 }, says: "1.85", source: "Blotz and others (1998), LL 45, standard to modified: +1.85 kN/m3" },
+  { relation: as(dryDensityByGauge), inputs: { wetDensity: 125.0, gaugeWaterMass: 13.4, gaugeOffset: 0.5 }, says: "111.1", source: "instrument manual: dry is wet less moisture, with the moisture corrected; derived" },
+  { relation: as(dryDensityByGaugePercent), inputs: { wetDensity: 2.05, gaugeWaterPercent: 12, gaugeOffset: 0.5 }, says: "1.8222", source: "definition of dry density with the corrected water content; derived" },
+  { relation: as(offsetOfGauge), inputs: { wetDensity: 125.0, waterContent: 12.5, gaugeWaterMass: 13.4 }, says: "0.4889", source: "ASTM D6938: mass of water by oven, 125 x 12.5 / 112.5 = 13.889, less that of the gauge; derived" },
+  { relation: as(offsetOfGaugePercent), inputs: { waterContent: 12.5, gaugeWaterPercent: 11.2 }, says: "1.3", source: "difference of the two; derived" },
+  { relation: as(densityOfSand), inputs: { containerAndSand: 11.3, containerMass: 8.0, containerVolume: 1 / 30 }, says: "99.0", source: "published sand-cone problem: a mould of 1/30 ft3 holds 3.30 lb" },
+  { relation: as(sandInConeFromWeighing), inputs: { bottleBefore: 7.53, bottleAfter: 7.0 }, says: "0.53", source: "the same: 0.53 lb in the cone" },
+  { relation: as(sprayLitres), inputs: { thickness: 200, dryDensity: 1.8, waterContent: 10, targetWater: 12 }, says: "7.20", source: "2 points in a 200 mm lift at 1.80 are 7.2 L/m2: common practice, no published source" },
+  { relation: as(sprayGallons), inputs: { thickness: 36, dryDensity: 110, waterContent: 10, targetWater: 11 }, says: "3.559", source: "one yard deep it is the 3.56 gal/yd3 of 27 ft3 and 8.345 lb a US gallon: derived" },
+  { relation: as(dryingDaysSi), inputs: { thickness: 200, dryDensity: 1.8, waterContent: 12, targetWater: 10, evaporation: 4 }, says: "1.80", source: "7.2 mm of water at 4 mm a day: derived" },
+  { relation: as(dryingDaysUs), inputs: { thickness: 8, dryDensity: 112.32, waterContent: 12, targetWater: 10, evaporation: 0.16 }, says: "1.800", source: "the same in US units: 8 in at 1.8 times 62.4 lb/ft3, 0.288 in of water at 0.16 in a day: derived" },
+  { relation: as(waterOfBlend), inputs: { firstMass: 100, firstWater: 10, secondMass: 50, secondWater: 25 }, says: "14.583", source: "90.909 and 40 of dry soil, 19.091 of water: derived" },
+  { relation: as(dryShareOfBlend), inputs: { firstWater: 10, secondWater: 25, targetWater: 14.58333 }, says: "30.556", source: "the same: 40 of 130.909 dry" },
+  { relation: as(moistShareOfBlend), inputs: { firstWater: 10, secondWater: 25, targetWater: 14.58333 }, says: "33.333", source: "the same: 50 of 150 moist" },
+  { relation: as(finesThatFill), inputs: { coarseDryDensity: 1.6, coarseGravity: 2.65, finesDryDensity: 1.3, waterDensity: 1 }, says: "24.353", source: "voids of 39.623 % filled at 1.3 beside 1.6 of coarse soil: derived" },
+  { relation: as(packedDensity), inputs: { coarseDryDensity: 1.6, coarseGravity: 2.65, finesDryDensity: 1.3, waterDensity: 1 }, says: "2.1151", source: "the same" },
+  { relation: as(uniformityCoefficient), inputs: { sixtyPercentSize: 2.4, tenPercentSize: 0.15 }, says: "16.0", source: "ASTM D2487, definition; derived" },
+  { relation: as(curvatureCoefficient), inputs: { thirtyPercentSize: 0.9, sixtyPercentSize: 2.4, tenPercentSize: 0.15 }, says: "2.250", source: "ASTM D2487, definition: 0.81 / 0.36; derived" },
+  { relation: as(rollRateUs), inputs: { drumWidth: 8, rollerSpeed: 3, thickness: 6, efficiency: 250 / 3, rollerPasses: 4 }, says: "489", source: "FM 5-434 example: 8 ft, 3 mph, 6 in, 50-minute hour, 4 passes give 489 yd3 an hour" },
+  { relation: as(rollRateSi), inputs: { drumWidth: 2, rollerSpeed: 4, thickness: 200, efficiency: 75, rollerPasses: 6 }, says: "200.0", source: "the same relation in metres: 1000 x 2 x 4 x 0.2 x 0.75 / 6; derived" },
   { relation: as(waterGap), inputs: { waterContent: 13.7, optimumWater: 12.5 }, says: "1.2", source: `${text9}, problems 6.4 and 6.5: field water against the water content of the highest point` },
   { relation: as(waterNeedLitres), inputs: { volume: 1, dryDensity: 1.8, waterContent: 10, targetWater: 11 }, says: "18", source: "18 L per m3 for 1.8 t/m3 and one point: common practice, no published source" },
   { relation: as(waterNeedLitres), inputs: { volume: 960000, dryDensity: 1.85, waterContent: 8, targetWater: 11.6 }, says: "63936000", source: "published problem: 960 000 m3, 3.6 points at 1.85 t/m3 give 63 936 m3 of water" },

@@ -6,19 +6,16 @@ import { kindOfCurveRule } from "./kind-of-curve";
 import { missesPoints } from "./misses-points";
 import { notBracketed } from "./not-bracketed";
 import { outlier } from "./outlier";
-import { oversizeLimits } from "./oversize-limits";
 import { pastLine } from "./past-line";
 import { repeatedPoints } from "./repeated-points";
-import { highestPointReported, reportedElsewhere, reportingPrecision } from "./reported-peak";
 import { saturationAtOptimum } from "./saturation-at-optimum";
 import { gravityAssumed, gravityImplausible } from "./specific-gravity";
 import { standsAbove } from "./stands-above";
-import { tinsDiffer } from "./tins-differ";
 import { tooFewPoints } from "./too-few-points";
 import { wetLeg } from "./wet-leg";
 
-/** Everything that is looked at in a compaction test, in the order in which equals are told. */
+/** What is looked at in the points of a compaction test, in the order in which equals are told. */
 export const curveRules = [
-  pastLine, missesPoints, kindOfCurveRule, outlier, tinsDiffer, notBracketed, curvePastLine, reportedElsewhere, saturationAtOptimum, influentialPoint, tooFewPoints, gap,
-  standsAbove, curvesDisagree, wetLeg, repeatedPoints, highestPointReported, reportingPrecision, oversizeLimits, gravityImplausible, gravityAssumed,
+  pastLine, missesPoints, kindOfCurveRule, outlier, notBracketed, curvePastLine, saturationAtOptimum, influentialPoint, tooFewPoints, gap,
+  standsAbove, curvesDisagree, wetLeg, repeatedPoints, gravityImplausible, gravityAssumed,
 ] as const;

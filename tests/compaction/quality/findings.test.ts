@@ -1,6 +1,6 @@
 import type { CompactionTest, CurveWord } from "../../../src/compaction/fit";
 import { fitTest } from "../../../src/compaction/fit-test";
-import { curveRules } from "../../../src/compaction/quality";
+import { recordRules as curveRules } from "../../../src/compaction/quality/record";
 import { COMMON_PRACTICE, type Place } from "../../../src/findings/finding";
 import { publishedTest } from "../../published/compaction-tests";
 
@@ -112,7 +112,7 @@ const cases: Readonly<Record<string, { fires: readonly Case[]; silent: readonly 
 };
 
 const findings = ({ test, curve = "auto" }: Case) => {
-  const outcome = fitTest(test, curve);
+  const outcome = fitTest(test, curve, { rules: curveRules });
   return (outcome.ok ? outcome.fit : outcome.noFit).findings;
 };
 const placeOf = (place: Place): number | "whole" => place.at === "point" ? place.index : "whole";

@@ -1,9 +1,12 @@
-import { fitTest } from "../../../src/compaction/fit-test";
+import { fitTest as fitPoints } from "../../../src/compaction/fit-test";
+import { recordRules } from "../../../src/compaction/quality/record";
 import { peakBlock } from "../../../src/worksheet/compaction";
 import { noChoices, type Choices } from "../../../taskpane/curve/choices";
-import { lookAt, marksOf, plotWords, pointWords, type Look } from "../../../taskpane/curve/model";
+import { lookAt, marksOf, plotWords, pointWords, type Fitter, type Look } from "../../../taskpane/curve/model";
 import { PEAK_BLOCK } from "../../../taskpane/curve/peak-block";
 import { sheet, turned } from "../../tables/sheet";
+
+const fitTest: Fitter = (test, word, options) => fitPoints(test, word, { ...options, rules: recordRules });
 
 // AS 1289.5.1.1 worked example with four points, published by a testing laboratory: MDD 2.01 t/m3, OMC 11.0 %
 const P = [["Water content (%)", 8.9, 10.1, 11.4, 13.0], ["Dry density (t/m³)", 1.948, 1.996, 2.006, 1.964]];
