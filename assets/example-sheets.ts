@@ -189,22 +189,24 @@ const FIELD = [
   ["F1", "0+020", 2.047, 14.6], ["F2", "0+040", 2.012, 13.1], ["F3", "0+060", 2.061, 15.2], ["F4", "0+080", 1.969, 12.4],
   ["F5", "0+100", 2.033, 16.8], ["F6", "0+120", 2.054, 14.1],
 ] as const;
-const field = sheet("Field", [12, 14, 16, 14, 14, 20, 14, 12, 12], 6,
+const field = sheet("Field", [12, 14, 16, 14, 14, 20, 14, 12, 12, 52], 6,
   [0, 0, [
     [text("Field tests on the lean clay, against Lab A", "title")],
     [text("Invented data. Relative compaction and distance from optimum follow the fitted peak of Lab A.", "note")],
     [text("Maximum dry density"), null, formula("TAMP.PEAKDRY('Lab A'!I8:I12,'Lab A'!K8:K12,\"auto\",'Lab A'!D3)", "thousandth"), text("Mg/m³", "unit")],
     [text("Optimum water content"), null, formula("TAMP.PEAKWATER('Lab A'!I8:I12,'Lab A'!K8:K12,\"auto\",'Lab A'!D3)", "tenth"), text("%", "unit")],
-    headings("Test", "Station", "Wet density", "Water content", "Dry density", "Relative compaction", "From optimum", "Saturation", "Air voids"),
-    units("", "", "Mg/m³", "%", "Mg/m³", "%", "points", "%", "%"),
+    headings("Test", "Station", "Wet density", "Water content", "Dry density", "Relative compaction", "From optimum", "Saturation", "Air voids", "Verdict"),
+    units("", "", "Mg/m³", "%", "Mg/m³", "%", "points", "%", "%", ""),
     ...FIELD.map(([id, station, wet, w], i): Entry[] => [
       text(id), text(station), number(wet, "input"), number(w, "input"),
       ...(i === 0 ? [
         formula("TAMP.SOILDRY(C7:C12,D7:D12)", "thousandth"), formula("TAMP.RELCOMP(E7:E12,C3)", "tenth"), formula("TAMP.WATERGAP(D7:D12,C4)", "tenth"),
         formula("TAMP.SATPCT(E7:E12,D7:D12,'Lab A'!D3)", "tenth"), formula("TAMP.AIRPCT(E7:E12,D7:D12,'Lab A'!D3)", "tenth"),
-      ] : filled("thousandth", "tenth", "tenth", "tenth", "tenth")),
+        formula("TAMP.FILLVERDICT(E7:E12,D7:D12,C3,C4,J4,'Lab A'!D3)", "text"),
+      ] : filled("thousandth", "tenth", "tenth", "tenth", "tenth", "text")),
     ]),
   ]],
+  [3, 8, [[text("Zone", "unit"), text("RC >= 95; gap -2..+2; air <= 10")]]],
   [14, 0, [
     [text("Water and borrow for the next lift", "title")],
     [text("Volume of compacted fill, m³"), null, null, number(1200, "input")],

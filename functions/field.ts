@@ -1,5 +1,6 @@
 import { holeWetColumn, relativeCompactionColumn, relativeDensityColumn, sandConeColumn, waterGapColumn, waterRatioColumn } from "../src/worksheet/field";
 import { gaugeDry, gaugeOffset, sandDensityColumn, sandInConeColumn } from "../src/worksheet/field-readings";
+import { fillVerdict } from "../src/worksheet/verdict";
 import { passChance } from "../src/worksheet/lots";
 import { cells, reply } from "./reply";
 
@@ -135,4 +136,20 @@ export function gaugeWaterOffset(wetDensity: any[][], gaugeWater: any[][], ovenW
  */
 export function passChanceOfTest(dry: any[][], maxDry: any[][], minRelComp: any[][], sdDry: any[][], sdMax?: any[][], lotMean?: any[][], lotSd?: any[][]): any[][] {
   return reply(() => passChance(cells(dry), cells(maxDry), cells(minRelComp), cells(sdDry), cells(sdMax), cells(lotMean), cells(lotSd)));
+}
+
+/**
+ * Judges a field test against a zone of acceptance written in words: "pass", or each reason why not.
+ * @customfunction FILLVERDICT
+ * @param dry Field dry density. A cell or a column.
+ * @param waterContent Field water content, percent of dry mass.
+ * @param maxDry Maximum dry density of the reference test, same unit.
+ * @param optimum Optimum water content of the reference test, percent of dry mass.
+ * @param zone Clauses such as "RC >= 95; gap -2..+2; air <= 10". Quantities: RC, gap (points from optimum), ratio (percent of optimum), water, air, saturation, dry; "round 0.1" where the specification has figures rounded first.
+ * @param [gs] Specific gravity of the solids; needed for air and saturation.
+ * @param [waterDensity] Density of water in the unit of the densities, or that unit as text, such as "lb/ft3". Left out: "Mg/m3".
+ * @returns "pass", or the reasons. Figures are judged as calculated; one that would pass only by rounding is said to be so.
+ */
+export function fillVerdictOfTest(dry: any[][], waterContent: any[][], maxDry: any[][], optimum: any[][], zone: any[][], gs?: any[][], waterDensity?: any[][]): any[][] {
+  return reply(() => fillVerdict(cells(dry), cells(waterContent), cells(maxDry), cells(optimum), cells(zone), cells(gs), cells(waterDensity)));
 }

@@ -99,3 +99,17 @@ test("GRADEWELL does not know the unit of the sizes", () => holds<[number, numbe
   close(cc2, cc, 1e-9);
   if (Math.abs(cu - 6) > 1e-6 && Math.abs(cc - 1) > 1e-6 && Math.abs(cc - 3) > 1e-6) expect(says2).toBe(says);
 }));
+
+test("FILLVERDICT passes exactly what lies in its zone, and names each clause that does not hold", () => {
+  let passed = 0, failed = 0;
+  holds<[number, number, number, number]>([between(1.65, 2.05), between(8, 22), between(88, 100), between(0.5, 4)], (dry, water, limit, gap) => {
+    const verdict = call("FILLVERDICT", dry, water, 1.9, 14, `RC >= ${limit}; gap ${-gap}..${gap}`)[0]![0] as string;
+    const low = one("RELCOMP", dry, 1.9) < limit, off = Math.abs(one("WATERGAP", water, 14)) > gap;
+    expect(verdict === "pass").toBe(!low && !off);
+    expect(verdict.includes("RC")).toBe(low);
+    expect(verdict.includes("gap")).toBe(off);
+    if (verdict === "pass") passed++; else failed++;
+  }, 800);
+  expect(passed).toBeGreaterThan(40);
+  expect(failed).toBeGreaterThan(200);
+});
