@@ -14,8 +14,8 @@ if (!name || !existsSync(root + file)) {
 install();
 if (!isBuilt()) tool("webpack/bin/webpack.js");
 const { buildSync } = await import("esbuild");
-const built = `${root}tests/benchmarks/.${name}.mjs`;
-buildSync({ entryPoints: [root + file], outfile: built, bundle: true, platform: "node", format: "esm", packages: "external", logLevel: "warning" });
+const built = `${root}tests/benchmarks/.${name}.cjs`;
+buildSync({ entryPoints: [root + file], outfile: built, bundle: true, platform: "node", format: "cjs", packages: "external", logLevel: "warning" });
 const { status } = spawnSync(process.execPath, [built, ...rest], { stdio: "inherit" });
 rmSync(built, { force: true });
 process.exit(status ?? 1);

@@ -19,7 +19,7 @@ function plain(name: string, from: number, to: number, { above = false, whole = 
       if (value instanceof CellError) return value;
       if (isBlank(value)) return refusal(`${name} is blank.`);
       if (typeof value !== "number" || !Number.isFinite(value)) return refusal(`${name} must be a number, not ${quoted(value)}.`);
-      if (value < from || value > to || (above && value === from)) return refusal(`${name} must ${above ? `be above ${from}${to === Infinity ? "" : ` and at most ${to}`}` : `lie between ${from} and ${to}`}, not ${value}.`);
+      if (value < from || value > to || (above && value === from)) return refusal(`${name} must be ${above ? "above" : "at least"} ${from}${to === Infinity ? "" : ` and at most ${to}`}, not ${value}.`);
       return whole && !Number.isInteger(value) ? refusal(`${name} must be a whole number, not ${value}.`) : value;
     },
   };

@@ -27,10 +27,12 @@ export function readPairs(firstId: QuantityId, first: Block, secondId: QuantityI
   for (let i = 0; i < firsts.length; i++) {
     const a = firsts[i], b = seconds[i];
     if ((isBlank(a) && isBlank(b)) || isHeading([a, b])) continue;
+    // an error that came in goes out, whatever stands beside it
+    for (const value of [a, b]) if (value instanceof CellError) return value;
     for (const [value, own, other] of [[a, firstReader, secondReader], [b, secondReader, firstReader]] as const)
       if (isBlank(value)) return refusal(`${word} ${i + 1} of the ranges: ${own.name} is blank beside ${other.name} ${quoted(own === firstReader ? b : a)}. Fill it in, or clear both.`);
     const x = firstReader.read(a), y = secondReader.read(b);
-    for (const read of [x, y]) if (read instanceof CellError) return read === a || read === b ? read : refusal(`${word} ${i + 1} of the ranges: ${read.says}`);
+    for (const read of [x, y]) if (read instanceof CellError) return refusal(`${word} ${i + 1} of the ranges: ${read.says}`);
     pairs.first.push(x as number);
     pairs.second.push(y as number);
     pairs.rows.push(i + 1);

@@ -64,7 +64,7 @@ test("LOTSPOTS: one place in each stretch, the same for the same seed", () => {
   });
   expect(lotSpots(at(120), at(8), at(6), at(7))).toEqual(spots);
   expect(lotSpots(at(120), at(8), at(6), at(8))).not.toEqual(spots);
-  for (const [args, pattern] of [[[null, at(8), at(6), at(7)], /give the length/], [[at(120), at(8), at(2.5), at(7)], /whole number/], [[at(120), at(8), at(6), null], /give the seed/], [[at(120), at(8), at(5000), at(1)], /between 1 and 1000/]] as [[Block | null, Block, Block, Block | null], RegExp][]) expect(lotSpots(...args)).toEqual(says(pattern));
+  for (const [args, pattern] of [[[null, at(8), at(6), at(7)], /give the length/], [[at(120), at(8), at(2.5), at(7)], /whole number/], [[at(120), at(8), at(6), null], /give the seed/], [[at(120), at(8), at(5000), at(1)], /at least 1 and at most 1000/]] as [[Block | null, Block, Block, Block | null], RegExp][]) expect(lotSpots(...args)).toEqual(says(pattern));
 });
 
 test("LOTTESTS rounds up, keeps the least, and asks for none where nothing was placed", () => {

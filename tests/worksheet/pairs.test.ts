@@ -28,4 +28,7 @@ test.each([
 test("a host's error passes through", () => {
   const error = new CellError("#DIV/0!", "");
   expect(read(down(10, error), down(1.8, 1.9))).toBe(error);
+  // a blank beside it does not turn it into words about an object
+  expect(read(down(10, error), down(1.8, ""))).toBe(error);
+  expect(read(down(10, null), down(1.8, error))).toBe(error);
 });
