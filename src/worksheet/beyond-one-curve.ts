@@ -10,10 +10,11 @@ import { relativeCompaction } from "../field/relative-compaction";
 import { densityUnit } from "../units/density-units";
 import { WATER_KG_M3_AT_20 } from "../units/water-density";
 import { CellError, columnsOf, isBlank, isLeftOut, isRange, notEnough, refusal, rowsOf, type Block, type Cell } from "./cell";
-import { curveReader, fitted, mixedUnits, readTest, sentence, single, type TestCells } from "./compaction-test";
+import { curveReader, fitted, mixedUnits, readTest, sentence, type TestCells } from "./compaction-test";
 import { NOT_BOUNDED } from "./compaction";
-import { readPairs } from "./pairs";
+import { inLine, readPairs } from "./pairs";
 import { numberOf, waterDensity, wordOf } from "./readers";
+import { readAll, single } from "./single";
 import { sameUnitGuard, unitGuard } from "./unit-guard";
 
 type Cells = Block | null;
@@ -42,10 +43,6 @@ export function spanOfWater(percent: Cells, cells: TestCells): Cell[][] | CellEr
   const { low, high } = waterSpan(found.fit, wanted!);
   return [[low ?? "not reached dry of the optimum", high ?? "not reached wet of the optimum"]];
 }
-
-/** One cell a row of a range that is a row or a column. */
-const inLine = (block: Block): readonly unknown[] | undefined =>
-  columnsOf(block) === 1 ? block.map((row) => row[0]) : rowsOf(block) === 1 ? block[0] : undefined;
 
 interface SheetTest { readonly id: string; readonly test: CompactionTest; readonly rows: readonly number[]; readonly trouble: CellError | undefined }
 
@@ -172,18 +169,11 @@ const fromUnitWeight = (unitWeight: number, water: number): number => unitWeight
 
 /** What a published correlation expects under another effort. */
 export function effortPeak(maxDry: Cells, optimum: Cells, effort: Cells, other: Cells, liquidLimit: Cells, water: Cells): Cell[][] | CellError {
-  const given = { maxDryDensity: maxDry, optimumWater: optimum, compactiveEffort: effort, otherEffort: other, liquidLimit } as const;
-  const values: Record<string, number> = {};
-  for (const [id, block] of Object.entries(given) as [keyof typeof given, Cells][]) {
-    const reader = numberOf(id);
-    if (isLeftOut(block)) return refusal(`give the ${reader.name}.`);
-    const read = single(reader, block);
-    if (read instanceof CellError) return read;
-    values[id] = read!;
-  }
+  const values = readAll({ maxDryDensity: maxDry, optimumWater: optimum, compactiveEffort: effort, otherEffort: other, liquidLimit });
+  if (values instanceof CellError) return values;
   const density = single(waterDensity, water);
   if (density instanceof CellError) return density;
-  const { maxDryDensity, optimumWater, compactiveEffort, otherEffort, liquidLimit: limit } = values as Record<keyof typeof given, number>;
+  const { maxDryDensity, optimumWater, compactiveEffort, otherEffort, liquidLimit: limit } = values;
   const trouble = unitGuard(maxDryDensity, density!);
   if (trouble) return trouble;
   for (const [name, value] of [["compactive effort", compactiveEffort], ["the other compactive effort", otherEffort]] as const)

@@ -1,9 +1,10 @@
 import { curveWords, type CompactionTest, type CurveWord, type Fit, type FitOutcome, type NoFit } from "../compaction/fit";
 import { fitTest } from "../compaction/fit-test";
-import { CellError, isLeftOut, isRange, notEnough, refusal, type Block } from "./cell";
+import { CellError, isLeftOut, notEnough, refusal, type Block } from "./cell";
 import { once } from "./once";
 import { readPairs } from "./pairs";
-import { numberOf, waterDensity, wordOf, type Reader } from "./readers";
+import { numberOf, waterDensity, wordOf } from "./readers";
+import { single } from "./single";
 import { unitGuard } from "./unit-guard";
 
 export type Cells = Block | null;
@@ -14,12 +15,6 @@ export interface TestCells { readonly waters: Cells; readonly dries: Cells; read
 export interface ReadTest { readonly test: CompactionTest; readonly word: CurveWord; readonly rows: readonly number[] }
 
 export const curveReader = wordOf("curve", curveWords, "auto");
-
-/** One value where a range would make no sense. */
-export function single<T>(reader: Reader<T>, block: Cells): T | CellError | undefined {
-  if (isLeftOut(block)) return reader.leftOut;
-  return isRange(block!) ? refusal(`${reader.name}: give one cell, not a range.`) : reader.check?.(block!) ?? reader.read(block![0]![0]);
-}
 
 export function readTest({ waters, dries, curve, gs, water }: TestCells): ReadTest | CellError {
   if (isLeftOut(waters)) return refusal("give the water contents of the points.");

@@ -1,36 +1,28 @@
 import { bankVolumeForFill } from "../earthwork/borrow";
 import { bulkingOfSand, looseLift, shrinkOfBank, shrinkOfFill, swellOfBank, swellOfLoose } from "../earthwork/states";
 import { waterNeedGallons, waterNeedLitres, waterToSpray } from "../earthwork/water";
-import { couldBeSoil, densityUnits, unitItLooksLike } from "../units/density-units";
-import { WATER_KG_M3_AT_20 } from "../units/water-density";
-import { refusal, type Block, type Cell, type CellError } from "./cell";
+import type { Block, Cell, CellError } from "./cell";
 import { argument, column } from "./column";
 import { numberOf, wordOf } from "./readers";
 import { relationColumn } from "./relation-column";
+import { systemGuard, systemWord } from "./systems";
 import { sameUnitGuard } from "./unit-guard";
 
 type Cells = Block | null;
 
-const unit = (id: string) => densityUnits.find((one) => one.id === id)!;
 const inputs = ["volume", "dryDensity", "waterContent", "targetWater"] as const;
-const systems = {
-  SI: { need: waterNeedLitres.by(...inputs), unit: unit("Mg/m3"), other: "US" },
-  US: { need: waterNeedGallons.by(...inputs), unit: unit("lb/ft3"), other: "SI" },
-} as const;
+const needs = { SI: waterNeedLitres.by(...inputs), US: waterNeedGallons.by(...inputs) };
 const spray = waterToSpray.by("waterNeed", "loss");
 
 /** Water to spray (with its loss) or, negative, to dry out (where there is none to lose). */
 export const waterToAdd = (volume: Cells, dry: Cells, now: Cells, target: Cells, loss: Cells, system: Cells): Cell[][] | CellError =>
   column([
     argument(numberOf("volume"), volume), argument(numberOf("dryDensity"), dry), argument(numberOf("waterContent"), now),
-    argument(numberOf("targetWater"), target), argument(numberOf("loss"), loss), argument(wordOf("system", ["SI", "US"], "SI"), system),
+    argument(numberOf("targetWater"), target), argument(numberOf("loss"), loss), argument(systemWord, system),
   ], (cubic, dryDensity, waterNow, wanted, lost, word) => {
-    const { need, unit: expected, other } = systems[word];
-    if (!couldBeSoil(dryDensity, expected, WATER_KG_M3_AT_20)) {
-      const really = unitItLooksLike(dryDensity, WATER_KG_M3_AT_20);
-      return refusal(`dry density ${dryDensity} cannot be a soil's in ${expected.printed}, the unit of "${word}".${really && really !== expected ? ` It looks like ${really.printed}${really === systems[other].unit ? `: choose "${other}"` : ""}.` : ""}`);
-    }
-    const water = need(cubic, dryDensity, waterNow, wanted);
+    const trouble = systemGuard(dryDensity, word);
+    if (trouble) return trouble;
+    const water = needs[word](cubic, dryDensity, waterNow, wanted);
     return water > 0 ? spray(water, lost) : water;
   });
 

@@ -3,9 +3,9 @@ import { densityOfSand, sandInConeFromWeighing } from "../field/sand-replacement
 import { mean } from "../lots/within-limits";
 import { CellError, notEnough, refusal, type Block, type Cell } from "./cell";
 import { argument, column } from "./column";
-import { single } from "./compaction-test";
 import { numberOf, wordOf } from "./readers";
 import { relationColumn } from "./relation-column";
+import { single } from "./single";
 
 type Cells = Block | null;
 

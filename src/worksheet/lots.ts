@@ -4,8 +4,8 @@ import { characteristicFactor, mean, percentWithin, sampleDeviation } from "../l
 import type { QuantityId } from "../relations/quantities";
 import { CellError, isBlank, isLeftOut, notEnough, quoted, refusal, type Block, type Cell } from "./cell";
 import { argument, column } from "./column";
-import { single } from "./compaction-test";
 import { numberOf, type Reader } from "./readers";
+import { single } from "./single";
 import { sameUnitGuard } from "./unit-guard";
 
 type Cells = Block | null;

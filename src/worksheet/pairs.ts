@@ -5,7 +5,8 @@ import type { QuantityId } from "../relations/quantities";
 /** Two series read together. `rows` tells where each pair stands in the ranges, counted from 1. */
 export interface Pairs { readonly first: readonly number[]; readonly second: readonly number[]; readonly rows: readonly number[] }
 
-const inLine = (block: Block): readonly unknown[] | undefined =>
+/** One cell a row of a range that is a row or a column. */
+export const inLine = (block: Block): readonly unknown[] | undefined =>
   columnsOf(block) === 1 ? block.map((row) => row[0]) : rowsOf(block) === 1 ? block[0] : undefined;
 
 /**

@@ -2,30 +2,17 @@ import { dryingDaysSi, dryingDaysUs, dryShareOfBlend, moistShareOfBlend, sprayGa
 import { curvatureCoefficient, finesThatFill, packedDensity, uniformityCoefficient } from "../earthwork/packing";
 import { lastUsefulPass, passesTo, rollerTrial, rollRateSi, rollRateUs } from "../earthwork/rolling";
 import { waterToSpray } from "../earthwork/water";
-import type { QuantityId } from "../relations/quantities";
-import { couldBeSoil, densityUnit, unitItLooksLike } from "../units/density-units";
-import { WATER_KG_M3_AT_20 } from "../units/water-density";
 import { CellError, isLeftOut, notEnough, refusal, type Block, type Cell } from "./cell";
 import { argument, column } from "./column";
-import { mixedUnits, single } from "./compaction-test";
+import { mixedUnits } from "./compaction-test";
 import { readPairs } from "./pairs";
 import { numberOf, waterDensity, wordOf, type Reader } from "./readers";
 import { relationColumn } from "./relation-column";
+import { readAll, single } from "./single";
+import { systemGuard, systemWord } from "./systems";
 import { sameUnitGuard, unitGuard } from "./unit-guard";
 
 type Cells = Block | null;
-type System = "SI" | "US";
-const systemWord = wordOf("system", ["SI", "US"], "SI");
-const UNIT: Readonly<Record<System, string>> = { SI: "Mg/m3", US: "lb/ft3" };
-
-/** Refuses a dry density that is no soil's in the unit of the system, and names the unit that it looks like. */
-function systemGuard(dry: number, system: System): CellError | undefined {
-  const expected = densityUnit(UNIT[system])!;
-  if (couldBeSoil(dry, expected, WATER_KG_M3_AT_20)) return undefined;
-  const really = unitItLooksLike(dry, WATER_KG_M3_AT_20), other = system === "SI" ? "US" : "SI";
-  return refusal(`dry density ${dry} cannot be a soil's in ${expected.printed}, the unit of "${system}".${really && really !== expected ? ` It looks like ${really.printed}${really.id === UNIT[other] ? `: choose "${other}"` : ""}.` : ""}`);
-}
-
 const inOrder = ["thickness", "dryDensity", "waterContent", "targetWater"] as const;
 const sprays = { SI: sprayLitres.by(...inOrder), US: sprayGallons.by(...inOrder) }, drying = { SI: dryingDaysSi.by(...inOrder, "evaporation"), US: dryingDaysUs.by(...inOrder, "evaporation") };
 const withLoss = waterToSpray.by("waterNeed", "loss");
@@ -68,18 +55,6 @@ export function finesFill(coarseDry: Cells, coarseGs: Cells, finesDry: Cells, wa
   if (trouble) return trouble;
   if (inputs.coarseDryDensity >= inputs.coarseGravity * inputs.waterDensity) return refusal(`a coarse soil of ${inputs.coarseDryDensity} has no voids at a specific gravity of ${inputs.coarseGravity}: check both.`);
   return [[finesThatFill.value(inputs), packedDensity.value(inputs)]];
-}
-
-function readAll<Id extends QuantityId>(blocks: Readonly<Record<Id, Cells>>): Record<Id, number> | CellError {
-  const out = {} as Record<Id, number>;
-  for (const id of Object.keys(blocks) as Id[]) {
-    const reader = numberOf(id);
-    if (isLeftOut(blocks[id])) return refusal(`give the ${reader.name}.`);
-    const read = single(reader, blocks[id]);
-    if (read instanceof CellError) return read;
-    out[id] = read!;
-  }
-  return out;
 }
 
 const rollOrder = ["drumWidth", "rollerSpeed", "thickness", "rollerPasses", "efficiency"] as const;
