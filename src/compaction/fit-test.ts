@@ -1,9 +1,9 @@
-import { findAll, type Rule } from "../findings/finding";
+import { findAll, type Finding, type Rule } from "../findings/finding";
 import { airVoidsOfPoint, degreeOfSaturation } from "../phase/lines";
 import { curveOf } from "./curves";
 import { residualsOf, spareOf, type Curve, type FitOptions, type FittedCurve } from "./curves/curve";
 import { distinctWaters } from "./curves/curve";
-import { curveName, type CompactionTest, type CurveWord, type Fit, type FitOutcome, type NoFit, type PeakIntervals, type PeakPlace } from "./fit";
+import { curveName, type CompactionTest, type CurveWord, type Fit, type FitOutcome, type NoFit, type OtherCurve, type PeakIntervals, type PeakPlace } from "./fit";
 import { peaksLeavingOneOut } from "./leave-one-out";
 import { curveRules } from "./quality";
 import { outlier } from "./quality/outlier";
@@ -29,7 +29,7 @@ export function fitTest(test: CompactionTest, word: CurveWord, { scatter = USUAL
 
 function fitAsAsked(test: CompactionTest, curve: Curve, options: TestOptions): FitOutcome {
   const found = curve.fit(test, options);
-  if (typeof found === "object") return { ok: true, fit: finish(test, options, found, weighCurves(test, options, found), "as asked for") };
+  if (typeof found === "object") return { ok: true, fit: finish(test, options, found, () => weighCurves(test, options, found), "as asked for") };
   if (found === "not-enough" && curve.id === "saturation" && test.specificGravity === undefined)
     return refuse(test, options, { why: "needs-gravity", says: "the saturation curve is bounded by the zero-air-voids line: give the specific gravity of the soil." });
   if (found === "no-peak" || curve.id === "top three" || curve.id === "smooth") return refuse(test, options, whyNoPeak(test, opensUpward(test), options.scatter));
@@ -50,7 +50,7 @@ function fitByWeighing(test: CompactionTest, options: TestOptions): FitOutcome {
   if (test.waters.length === 3) {
     const found = curveOf("top three").fit(test, options);
     if (typeof found !== "object") return refuse(test, options, whyNoPeak(test, opensUpward(test), options.scatter));
-    return { ok: true, fit: finish(test, options, found, weighing, "with three points there is only the parabola through them, and no spare point to judge it by") };
+    return { ok: true, fit: finish(test, options, found, () => weighing, "with three points there is only the parabola through them, and no spare point to judge it by") };
   }
   const { admitted, left, pastLine } = weighing, scatter = curveScatter(test.dries, options.scatter);
   const least = Math.min(...admitted.map(({ weight }) => weight));
@@ -75,17 +75,17 @@ function fitByWeighing(test: CompactionTest, options: TestOptions): FitOutcome {
   const reason = against.length > 0
     ? `${best.weight > least ? "the plainer curve, and as good" : "weighs least"}: ${best.weight.toFixed(1)} against ${[...against, ...left].join("; ")} (RSS/σ² + 2p, σ ${percent(options.scatter.curve)} % of dry density)`
     : `the only curve admitted (${left.join("; ") || "no other"})`;
-  return { ok: true, fit: finish(test, options, fitted, weighing, reason) };
+  return { ok: true, fit: finish(test, options, fitted, () => weighing, reason) };
 }
 
 const shown = (value: number): string => String(Number(value.toPrecision(3)));
 const percent = (share: number): string => String(Number((100 * share).toPrecision(3)));
 
-function finish(test: CompactionTest, options: TestOptions, fitted: FittedCurve, weighing: Weighing, reason: string): Fit {
-  const spare = spareOf(fitted), { peak, at } = fitted, reckoning = fitted.reckon(), otherCurves = othersThan(fitted, weighing);
+function finish(test: CompactionTest, options: TestOptions, fitted: FittedCurve, weighing: () => Weighing, reason: string): Fit {
+  const spare = spareOf(fitted), { peak, at } = fitted, reckoning = fitted.reckon();
   const { specificGravity, waterDensity } = test;
   const atPeak = specificGravity === undefined ? undefined : { dryDensity: peak.dry, waterContent: peak.water, specificGravity, waterDensity };
-  let leftOut: (PeakPlace | null)[] | undefined, joined: PeakIntervals | undefined;
+  let leftOut: (PeakPlace | null)[] | undefined, joined: PeakIntervals | undefined, others: OtherCurve[] | undefined, findings: Finding[] | undefined;
   const fit: Fit = {
     test, reason, curve: fitted.curve.id, used: fitted.used, parameters: fitted.parameters, at,
     maxDryDensity: { value: peak.dry, ...reckoning.maxDryDensity },
@@ -97,16 +97,17 @@ function finish(test: CompactionTest, options: TestOptions, fitted: FittedCurve,
     residuals: residualsOf(test, fitted),
     saturationAtOptimum: atPeak ? positive(degreeOfSaturation.value(atPeak)) : null,
     airVoidsAtOptimum: atPeak ? airVoidsOfPoint.value(atPeak) : null,
-    otherCurves,
-    joined: () => joined ??= joinedInterval(reckoning, otherCurves),
+    // a cell that asks for the peak alone does not wait for the other curves
+    get otherCurves() { return others ??= othersThan(fitted, weighing()); },
+    joined: () => joined ??= joinedInterval(reckoning, fit.otherCurves),
     leaveOneOut: () => leftOut ??= peaksLeavingOneOut(test, fitted, options),
     bandAt(water) {
       const half = reckoning.halfBand(water), middle = at(water);
       return { low: middle - half, high: middle + half };
     },
-    findings: [],
+    get findings() { return findings ??= findAll(options.rules, subject(test, options, fit)); },
   };
-  return { ...fit, findings: findAll(options.rules, subject(test, options, fit)) };
+  return fit;
 }
 
 const positive = (value: number): number | null => value > 0 && Number.isFinite(value) ? value : null;

@@ -75,7 +75,7 @@ export interface Fit {
   readonly intervalNote: string;
   /** how many times the interval was widened; 1 where it was not */
   readonly widening: number;
-  /** other admissible curves that the points cannot tell from this one, with what they say */
+  /** other admissible curves that the points cannot tell from this one, with what they say. Computed when first asked for, as the findings are. */
   readonly otherCurves: readonly OtherCurve[];
   /** the interval of this curve joined with what the other curves say: scatter and doubt about the curve in one. Computed when first asked for. */
   joined(): PeakIntervals;

@@ -48,20 +48,19 @@ function reckon(fit: PolynomialFit, top: number, waters: readonly number[], doub
   });
   const spare = waters.length - p, widening = spare > 0 ? Math.max(1, Math.sqrt(fit.sumOfSquares / expected)) : 1;
   const k = NORMAL_95 * widening;
-  const spread = (u: number): Spread => {
-    const { value: g, slope: h } = gradientsAt(p, u);
-    let value = 0, slope = 0, both = 0;
-    for (let i = 0; i < p; i++) {
-      let cg = 0, ch = 0;
-      for (let j = 0; j < p; j++) {
-        cg += covariance[i * p + j]! * g[j]!;
-        ch += covariance[i * p + j]! * h[j]!;
-      }
-      value += g[i]! * cg;
-      slope += h[i]! * ch;
-      both += g[i]! * ch;
-    }
-    return { value, slope, both };
+  // gᵀCg and its like are themselves polynomials of u: a scan over u then costs three of them a step
+  const ofValue = new Float64Array(2 * p - 1), ofSlope = new Float64Array(2 * p - 1), ofBoth = new Float64Array(2 * p - 1);
+  for (let i = 0; i < p; i++) for (let j = 0; j < p; j++) {
+    const c = covariance[i * p + j]!;
+    ofValue[i + j]! += c;
+    if (i > 0 && j > 0) ofSlope[i + j - 2]! += i * j * c;
+    if (j > 0) ofBoth[i + j - 1]! += j * c;
+  }
+  const at = (coefficients: Float64Array, u: number): number => {
+    let sum = 0;
+    for (let k = coefficients.length - 1; k >= 0; k--) sum = sum * u + coefficients[k]!;
+    return sum;
   };
-  return { method: "exact", widening, ...peakIntervals(fit, top, spread, k), halfBand: (water) => k * Math.sqrt(Math.max(0, spread(scaled(fit, water)).value)) };
+  const spread = (u: number): Spread => ({ value: Math.max(0, at(ofValue, u)), slope: Math.max(0, at(ofSlope, u)), both: at(ofBoth, u) });
+  return { method: "exact", widening, ...peakIntervals(fit, top, spread, k), halfBand: (water) => k * Math.sqrt(spread(scaled(fit, water)).value) };
 }
