@@ -60,13 +60,26 @@ export function readPoints(reading: Reading, problems: Problem[]): TablePoint[] 
   const fractionTrouble = fractionsWithoutFormat(reading);
   if (fractionTrouble) { problems.push(fractionTrouble); return []; }
   const points: TablePoint[] = [];
-  for (const group of groupPoints(reading)) {
+  const groups = groupPoints(reading);
+  for (const [i, group] of groups.entries()) {
     const found: Problem[] = [];
     const point = readPoint(reading, group, found);
     problems.push(...found);
-    if (point) points.push(point);
+    if (!point) continue;
+    const lines = [group.at, ...reading.positions.filter((position) => position > group.at && position < (groups[i + 1]?.at ?? Infinity))];
+    points.push(reading.waterFrom === "column" ? { ...point, tins: tinsBeside(reading, lines) ?? point.tins } : point);
   }
   return points;
+}
+
+/** Water contents of the tins that stand beside a water content typed or computed by the sheet; null where there are not two whole ones. */
+function tinsBeside({ grid, series }: Reading, lines: readonly number[]): number[] | null {
+  const [wet, dry, tare] = (["wetAndTin", "dryAndTin", "tare"] as const).map((role) => series.filter((one) => one.role === role)) as [Series[], Series[], Series[]];
+  const waters = lines.flatMap((line) => wet.flatMap((_, i) => {
+    const [wetMass, dryMass, tin] = [wet[i], dry[i], tare[i]].map((one) => one && grid.value(one.index, line));
+    return typeof wetMass === "number" && typeof dryMass === "number" && typeof tin === "number" && wetMass >= dryMass && dryMass > tin ? [waterContentFromMasses.value({ wetMass, dryMass, tare: tin })] : [];
+  }));
+  return waters.length >= 2 ? waters : null;
 }
 
 /** Water contents that all lie below 1 in cells not formatted as %: percents or fractions, only the user can say. */

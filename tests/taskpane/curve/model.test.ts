@@ -84,6 +84,13 @@ describe("soil, oversize, scatter and a reported peak", () => {
     })];
     const seen = lookAt(sheet(rows), noChoices, fitTest);
     expect(seen.findings.filter(({ id }) => id === "tins-differ").map(({ point }) => point)).toEqual([2]);
+    // the same beside a water content that the sheet has worked out itself, the second tin on a line of its own
+    const lines = (rows.slice(1) as number[][]).flatMap(([density, wet, dry, tin, wet2, dry2, tin2], i) => [
+      [Number((wet! - dry! + (i === 2 ? 0.7 : 0.05)).toFixed(2)), density!, wet!, dry!, tin!], [null, null, wet2!, dry2!, tin2!],
+    ]);
+    const stated = lookAt(sheet([["Water content (%)", "Wet density (Mg/m³)", "Wet + tin (g)", "Dry + tin (g)", "Tin (g)"], ...lines]), noChoices, fitTest);
+    expect(stated.table.points).toHaveLength(5);
+    expect(stated.findings.filter(({ id }) => id === "tins-differ").map(({ point }) => point)).toEqual([2]);
   });
 });
 
