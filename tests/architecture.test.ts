@@ -49,7 +49,7 @@ const ROOMS: Readonly<Record<string, readonly string[]>> = {
   taskpane: ["src/worksheet", "src/tables", "src/compaction", "src/findings", "src/phase", "src/units", "src/relations"],
 };
 /** what stands between pane and hosts may be known to all of these: the port, addresses, and what a book is */
-const PORT = ["src/workbook/port.ts", "src/workbook/address.ts", "src/workbook/consent.ts", "src/workbook/file/book.ts"];
+const PORT = ["src/workbook/port.ts", "src/workbook/address.ts", "src/workbook/consent.ts", "src/workbook/pieces.ts", "src/workbook/file/book.ts"];
 const MAY_KNOW_THE_PORT = /^(?:src\/workbook|src\/engine|src\/bench|src\/tables|taskpane)/;
 /** the outermost pieces, which join rooms together */
 const JOINS: Readonly<Record<string, readonly string[]>> = { "src/bench": ["src/workbook/bench", "src/workbook/frame", "src/workbook/file"], taskpane: ["src/workbook/frame", "src/workbook/office"], "src/tables": ["src/workbook"] };

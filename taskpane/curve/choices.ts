@@ -32,7 +32,9 @@ export interface Choices {
 
 export const noChoices: Choices = { corrections: {}, curve: "auto", specificGravity: null, assumed: null, waterDensity: "", soil: null, pointScatter: "", wetScatter: "", waterScatter: "", weigh: false, stonePercent: "", stoneGravity: "", stoneWater: "", reportedDry: "", reportedWater: "", standard: null, test: null };
 
-export const writeChoices = (choices: Choices): string => JSON.stringify({ version: 1, ...choices });
+/** Only what differs from no choice at all: a workbook's own memory is small. */
+export const writeChoices = (choices: Choices): string =>
+  JSON.stringify({ version: 1, ...Object.fromEntries(Object.entries(choices).filter(([key, value]) => JSON.stringify(value) !== JSON.stringify(noChoices[key as keyof Choices]))) });
 
 const isRecord = (value: unknown): value is Record<string, unknown> => typeof value === "object" && value !== null && !Array.isArray(value);
 

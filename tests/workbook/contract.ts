@@ -139,6 +139,16 @@ export function portContract(make: () => Promise<ContractHost>): void {
     expect(await host.note("Plain", 1, 0)).toBe(`${SIGNATURE}: Twice.`);
   });
 
+  test("remembers a setting longer than a host keeps in one property, whole and by letters of any width", async () => {
+    const long = `{"kept":"${"0123456789".repeat(40)} ρ_d €uro 🧱 ${"x".repeat(300)}"}`;
+    await port.remember("long", long);
+    expect(await port.recall("long")).toBe(long);
+    await port.remember("long", "short");
+    expect(await port.recall("long")).toBe("short");
+    await port.remember("long", null);
+    expect(await port.recall("long")).toBeNull();
+  });
+
   test("remembers small settings, and forgets them", async () => {
     expect(await port.recall("gs")).toBeNull();
     await port.remember("gs", "2.70");

@@ -1,4 +1,5 @@
 import type { Package } from "./package";
+import { fromPieces, inPieces, pieceName } from "../pieces";
 import { addContentType, addLink, linksOf, removeContentType, removeLinks } from "./relations";
 import { escapeXml, readXml } from "./xml";
 
@@ -24,16 +25,16 @@ export function readSettings(pack: Package): Record<string, string> {
     text(more) { text += more; },
     close(tag) { if (tag === "property" && name.startsWith(PREFIX)) settings.set(name.slice(PREFIX.length), text); },
   });
-  return Object.fromEntries(settings);
+  return Object.fromEntries(fromPieces(settings));
 }
 
 /** Makes our settings exactly these; other properties stay. A part that only we needed goes when ours are gone. */
 export function writeSettings(pack: Package, settings: Readonly<Record<string, string>>): void {
-  const part = partOf(pack), names = Object.keys(settings);
-  if (!part && names.length === 0) return;
+  const part = partOf(pack), properties = Object.entries(settings).flatMap(([name, text]) => inPieces(text).map((piece, i) => [pieceName(name, i + 1), piece] as const));
+  if (!part && properties.length === 0) return;
   const before = part && pack.has(part) ? pack.text(part).replace(/<Properties([^>]*)\/>/, "<Properties$1></Properties>") : `${HEAD}</Properties>`;
   const others = before.replace(OURS, "");
-  if (names.length === 0 && others === `${HEAD}</Properties>` && part === PART) {
+  if (properties.length === 0 && others === `${HEAD}</Properties>` && part === PART) {
     pack.remove(PART);
     removeContentType(pack, PART);
     removeLinks(pack, "", (link) => link.includes(RELATION));
@@ -41,7 +42,7 @@ export function writeSettings(pack: Package, settings: Readonly<Record<string, s
   }
   const pids = [...others.matchAll(/\spid="(\d+)"/g)].map((match) => Number(match[1]));
   let pid = Math.max(1, ...pids);
-  const own = names.map((name) => `<property fmtid="${FORMAT_ID}" pid="${++pid}" name="${escapeXml(PREFIX + name)}"><vt:lpwstr>${escapeXml(settings[name]!)}</vt:lpwstr></property>`).join("");
+  const own = properties.map(([name, text]) => `<property fmtid="${FORMAT_ID}" pid="${++pid}" name="${escapeXml(PREFIX + name)}"><vt:lpwstr>${escapeXml(text)}</vt:lpwstr></property>`).join("");
   pack.put(part ?? PART, others.replace("</Properties>", `${own}</Properties>`));
   if (!part) {
     addContentType(pack, PART, TYPE);

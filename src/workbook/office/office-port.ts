@@ -2,10 +2,13 @@ import { CellError, type Cell, type ErrorCode } from "../../worksheet/cell";
 import { areaName, cellName, overlap } from "../address";
 import { markFormula, markKindOf, SIGNATURE, type Area, type Content, type Done, type Mark, type MarkKind, type Placement, type PortEvent, type SheetInfo, type Snapshot, type WorkbookPort } from "../port";
 import { againstWriting, noSheet, refused, spills, targetsOf } from "../consent";
+import { inPieces, MOST_PIECES, pieceName } from "../pieces";
 import { refusalOf } from "./refusals";
 
 const MOST_CELLS = 200_000;
 const SETTING = "Tampsheet.";
+const piecesOf = (context: Excel.RequestContext, key: string): Excel.CustomProperty[] =>
+  Array.from({ length: MOST_PIECES }, (_, i) => context.workbook.properties.custom.getItemOrNullObject(pieceName(SETTING + key, i + 1)));
 
 const LOOKS: Readonly<Record<MarkKind, { readonly fill: string; readonly ink: string }>> = {
   "past-line": { fill: "#FFD9CC", ink: "#7A1F05" },
@@ -28,22 +31,20 @@ export function officePort(): WorkbookPort {
     unmark: (sheet) => attempt([], (context) => unmarkSheets(context, sheet)),
     goTo: (area) => attempt([area], (context) => goTo(context, area)),
     recall: (key) => Excel.run(async (context) => {
-      const property = context.workbook.properties.custom.getItemOrNullObject(SETTING + key);
-      property.load("value");
+      const pieces = piecesOf(context, key);
+      for (const property of pieces) property.load("value");
       await context.sync();
-      return property.isNullObject ? null : String(property.value);
+      const end = pieces.findIndex((property) => property.isNullObject);
+      return end === 0 ? null : pieces.slice(0, end < 0 ? undefined : end).map(({ value }) => String(value)).join("");
     }),
     remember: (key, value) => Excel.run(async (context) => {
-      const { custom } = context.workbook.properties;
-      if (value !== null) {
-        // adding under a name that is there replaces its value
-        custom.add(SETTING + key, value);
-      } else {
-        const property = custom.getItemOrNullObject(SETTING + key);
-        property.load("key");
-        await context.sync();
-        if (!property.isNullObject) property.delete();
-      }
+      const pieces = piecesOf(context, key), texts = value === null ? [] : inPieces(value);
+      if (texts.length > MOST_PIECES) throw new Error(`a setting of ${value!.length} characters is too long to travel in the workbook`);
+      for (const property of pieces.slice(texts.length)) property.load("key");
+      await context.sync();
+      // adding under a name that is there replaces its value
+      texts.forEach((text, i) => context.workbook.properties.custom.add(pieceName(SETTING + key, i + 1), text));
+      for (const property of pieces.slice(texts.length)) if (!property.isNullObject) property.delete();
       await context.sync();
     }),
     on: listen,

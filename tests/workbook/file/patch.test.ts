@@ -149,6 +149,13 @@ describe("marks and notes", () => {
 
 describe("settings", () => {
   const remembered = (bytes: Uint8Array, settings: Record<string, string>): Uint8Array => patchBook(bytes, { sheets: [], settings });
+  test("a long one travels in pieces of 255 characters, as desktop hosts keep no more, and comes back whole", () => {
+    const long = "0123456789".repeat(90), after = remembered(book, { long });
+    expect(readBook(after).settings).toEqual({ long });
+    const xml = parts(after)["docProps/custom.xml"]!;
+    expect([...xml.matchAll(/<vt:lpwstr>([^<]*)<\/vt:lpwstr>/g)].map(([, text]) => text!.length)).toEqual([255, 255, 255, 135]);
+    expect(readBook(remembered(after, { long: "short" })).settings).toEqual({ long: "short" });
+  });
   test("they travel in the file, and leave nothing behind", () => {
     const after = remembered(book, { gs: "2.70", "columns/Lab A": '{"a":"<&>"}' });
     expect(readBook(after).settings).toEqual({ gs: "2.70", "columns/Lab A": '{"a":"<&>"}' });

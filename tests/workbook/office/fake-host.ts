@@ -171,7 +171,7 @@ class Handlers<Handler> {
 
 class CustomProperties {
   constructor(private readonly context: Context) {}
-  add(name: string, value: string): void { this.context.later(() => this.context.host.properties.set(name, value)); }
+  add(name: string, value: string): void { this.context.later(() => this.context.host.properties.set(name, value.slice(0, 255))); }
   getItemOrNullObject(name: string) { return strict(new CustomProperty(this.context, name)); }
 }
 
