@@ -52,6 +52,9 @@ function fitByWeighing(test: CompactionTest, options: TestOptions): FitOutcome {
     if (typeof found !== "object") return refuse(test, options, whyNoPeak(test, opensUpward(test), options.scatter));
     return { ok: true, fit: finish(test, options, found, () => weighing, "with three points there is only the parabola through them, and no spare point to judge it by") };
   }
+  // one curve through two peaks, or through a dip, would look right and be wrong: such points are not weighed at all
+  const odd = notOnePeak(test, options.scatter);
+  if (odd) return refuse(test, options, odd);
   const { admitted, left, pastLine } = weighing, scatter = curveScatter(test.dries, options.scatter);
   const least = Math.min(...admitted.map(({ weight }) => weight));
   // curves stand in the order of their parameters: the first that is as good as the best is the plainest
@@ -63,8 +66,6 @@ function fitByWeighing(test: CompactionTest, options: TestOptions): FitOutcome {
   }
   const { fitted } = best;
   if (Math.sqrt(fitted.sumOfSquares / spareOf(fitted)) > FOLLOWS * scatter) {
-    const odd = notOnePeak(test, options.scatter);
-    if (odd) return refuse(test, options, odd);
     const off = residualsOf(test, fitted).map(Math.abs), worst = off.indexOf(Math.max(...off));
     return refuse(test, options, {
       why: "no-curve-follows",
