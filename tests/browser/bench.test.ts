@@ -210,3 +210,12 @@ test("nothing is asked of any other place, and nothing went wrong unseen", () =>
   expect(foreign.filter((url) => !url.startsWith("https://appsforoffice.microsoft.com/"))).toEqual([]);
   expect(trouble).toEqual([]);
 });
+
+test("at 360 px neither the bar nor the pane reaches beyond the edge", async () => {
+  const narrow = await browser.newPage({ viewport: { width: 360, height: 800 } });
+  await narrow.goto(new URL("bench/", process.env["BENCH_URL"]).href);
+  await narrow.waitForFunction(() => window.bench?.computedAfterMs, null, { timeout: 60_000 });
+  const right = await narrow.evaluate(() => ["#toggle-pane", "#grid", "#pane"].map((selector) => document.querySelector(selector)!.getBoundingClientRect().right));
+  expect(Math.max(...right)).toBeLessThanOrEqual(360);
+  await narrow.close();
+});
